@@ -1,0 +1,16 @@
+/// <reference types="vitest/config" />
+import tailwindcss from '@tailwindcss/vite';
+import react from '@vitejs/plugin-react';
+import { defineConfig } from 'vite';
+
+export default defineConfig({
+  plugins: [react(), tailwindcss()],
+  build: { outDir: 'dist/client', emptyOutDir: true, target: 'es2023' },
+  worker: { format: 'es' },
+  test: {
+    include: ['tests/**/*.test.ts', 'tests/**/*.test.tsx'],
+    exclude: ['tests/bench/**', 'node_modules/**'],
+    testTimeout: 30_000,
+    hookTimeout: 60_000,
+  },
+});
