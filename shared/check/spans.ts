@@ -1,0 +1,121 @@
+// The stretches of one motion in which the gap is below a limit. A stretch is searched as a whole: proven clear, it is
+// done; otherwise it is halved until what is left is shorter than half the accuracy of travel. So no hit hides between
+// samples, and the ends are good to the accuracy.
+import {
+  roundingOf,
+  stepTravel,
+  type GapMeter,
+  type Path,
+  type Placed,
+  type Side as MovingSide,
+} from '#shared/geometry';
+import { shapeBox } from '#shared/geometry';
+import { applyRigid, composeRigid } from '#shared/units';
+import type { Span } from './report';
+
+export interface SpanQuestion {
+  readonly meter: GapMeter;
+  readonly a: MovingSide;
+  readonly b: MovingSide;
+  /** Which of the two moves. */
+  readonly moving: 'a' | 'b';
+  /** Gaps below this count, mm. */
+  readonly limit: number;
+  /** A gap may be called clear from limit - slack on, mm. */
+  readonly slack: number;
+  /** mm of travel of the fastest moving point. */
+  readonly accuracy: number;
+  readonly largest: number;
+}
+
+/** Farthest that any point of the solids lies from the axis of a swing, at most, mm. */
+function largestRadius(solids: readonly Placed[], path: Path, step: number): number {
+  const s = path.steps[step]!;
+  if (s.kind === 'slide') return 0;
+  const before = path.befores[step]!;
+  let most = 0;
+  for (const solid of solids) {
+    const pose = composeRigid(before, solid.pose);
+    const box = shapeBox(solid.shape);
+    for (let k = 0; k < 8; k += 1) {
+      const p = applyRigid(pose, [
+        box[0]! + (k & 1 ? box[3]! : -box[3]!),
+        box[1]! + (k & 2 ? box[4]! : -box[4]!),
+        box[2]! + (k & 4 ? box[5]! : -box[5]!),
+      ]);
+      const d = [p[0] - s.point[0], p[1] - s.point[1], p[2] - s.point[2]] as const;
+      const along = d[0] * s.axis[0] + d[1] * s.axis[1] + d[2] * s.axis[2];
+      most = Math.max(most, d[0] * d[0] + d[1] * d[1] + d[2] * d[2] - along * along);
+    }
+  }
+  return Math.sqrt(most);
+}
+
+/** Travel of the fastest point, mm, over each step of the moving side's path. */
+export function stepTravels(side: MovingSide): number[] {
+  return side.path.steps.map((step, i) => stepTravel(step, largestRadius(side.solids, side.path, i)));
+}
+
+/** Adds a stretch, joining it to the one before if less than the accuracy of travel lies between. */
+function addSpan(
+  spans: [number, number][],
+  from: number,
+  to: number,
+  travelBetween: (a: number, b: number) => number,
+  accuracy: number,
+): void {
+  const last = spans.at(-1);
+  if (last !== undefined && travelBetween(last[1], from) <= accuracy) last[1] = Math.max(last[1], to);
+  else spans.push([from, to]);
+}
+
+/** The stretches below the limit, in order; a lone one shorter than the accuracy as [p, p]. */
+export function spansBelow(q: SpanQuestion): Span[] {
+  const side = q.moving === 'a' ? q.a : q.b;
+  const travels = stepTravels(side);
+  const n = travels.length;
+  const travelBetween = (from: number, to: number): number => {
+    let sum = 0;
+    for (const [i, travel] of travels.entries()) {
+      const a = Math.max(from, i / n);
+      const b = Math.min(to, (i + 1) / n);
+      if (b > a) sum += travel * (b - a) * n;
+    }
+    return sum;
+  };
+  const clearFrom = q.limit - q.slack + roundingOf(q.largest);
+  const spans: [number, number][] = [];
+  const lone: number[] = [];
+  const rest = { from: 0, to: 1 };
+
+  const visit = (from: number, to: number): void => {
+    const range = { from, to };
+    const near = q.meter.measure(
+      q.a,
+      q.b,
+      (lower, upper) => upper < q.limit || lower >= clearFrom,
+      q.moving === 'a' ? range : rest,
+      q.moving === 'b' ? range : rest,
+      q.limit,
+    );
+    if (near.upper >= q.limit) return;
+    const travel = travelBetween(from, to);
+    const middle = from + (to - from) / 2;
+    const position = near.positions[q.moving === 'a' ? 0 : 1];
+    const reaches = Math.max(travelBetween(from, position), travelBetween(position, to));
+    const throughout = near.contained || near.upper + reaches < q.limit;
+    if (throughout || travel <= q.accuracy / 2 || middle <= from || middle >= to) {
+      const before = spans.length;
+      addSpan(spans, from, to, travelBetween, q.accuracy);
+      if (spans.length > before) lone.push(position);
+      return;
+    }
+    visit(from, middle);
+    visit(middle, to);
+  };
+  for (let step = 0; step < n; step += 1) visit(step / n, (step + 1) / n);
+  return spans.map(([from, to], i): Span => {
+    const p = lone[i]!;
+    return travelBetween(from, to) < q.accuracy ? [p, p] : [from, to];
+  });
+}
