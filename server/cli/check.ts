@@ -81,7 +81,7 @@ function readScene(file: string): { scene: Scene; sha256: string } {
   }
   const loaded = loadSceneText(bytes);
   if (!loaded.ok) {
-    const first = loaded.refusals[0]!;
+    const first = loaded.refusals[0];
     throw new Refused(first.path === '' ? `${file}: ${first.reason}` : `${file}: ${first.path}: ${first.reason}`);
   }
   return { scene: loaded.scene, sha256: createHash('sha256').update(bytes).digest('hex') };

@@ -104,7 +104,7 @@ function freed(
   let best: Freed | null = null;
   for (const positions of positionsToTry(m.at, a, b, spans)) {
     const still = [placedAt(a, positions[0]), placedAt(b, positions[1])] as const;
-    const here =
+    const here: Gap =
       best === null
         ? m.at
         : meter.measure(

@@ -271,7 +271,7 @@ export class Searcher {
     s.size = Math.sqrt(hx * hx + hy * hy + hz * hz);
     s.travel =
       stretch.kind === 'swing'
-        ? stretch.chord * (Math.sqrt(radiusSquared(stretch, centre[0]!, centre[1]!, centre[2]!)) + s.size)
+        ? stretch.chord * (Math.sqrt(radiusSquared(stretch, centre[0], centre[1], centre[2])) + s.size)
         : stretch.half;
     return s;
   }

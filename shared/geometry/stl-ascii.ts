@@ -2,8 +2,7 @@
 // indentation. Normals are not used for anything and may be wrong or missing; corners may not.
 import type { StlResult } from './stl';
 
-const WORDS = ['solid', 'facet', 'outer', 'loop', 'vertex', 'endloop', 'endfacet', 'endsolid'] as const;
-type Word = (typeof WORDS)[number];
+type Word = 'solid' | 'facet' | 'outer' | 'loop' | 'vertex' | 'endloop' | 'endfacet' | 'endsolid';
 
 const refuse = (reason: string): StlResult => ({ ok: false, reason });
 const isBlank = (c: number): boolean => c <= 0x20;

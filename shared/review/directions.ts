@@ -19,7 +19,7 @@ const WORDS = [
  */
 export function movesOf(vector: readonly [number, number, number], least: number): Move[] {
   const moves = vector
-    .map((x, k): Move => ({ distance: Math.abs(x), direction: WORDS[k]![x < 0 ? 1 : 0]! }))
+    .map((x, k): Move => ({ distance: Math.abs(x), direction: WORDS[k]![x < 0 ? 1 : 0] }))
     .filter((m) => m.distance > 0)
     .sort((a, b) => b.distance - a.distance);
   const worth = moves.filter((m) => m.distance >= least);

@@ -22,7 +22,7 @@ export function parseAngle(input: string, options: { readonly current?: number }
   if (!number.ok) return refuse(`“${input.trim()}” is not an angle: ${number.reason}. Type degrees, like 12.5.`);
   // angles are negative as often as not, so only a plus changes what is there
   const relative = equals === '' && sign === '+' && options.current !== undefined;
-  const value = (relative ? options.current! : 0) + (sign === '-' ? -number.value : number.value);
+  const value = (relative ? options.current : 0) + (sign === '-' ? -number.value : number.value);
   if (Math.abs(value) > LARGEST) return refuse(`That is more than ${LARGEST} degrees.`);
   return { ok: true, degrees: degrees(value + 0), relative };
 }

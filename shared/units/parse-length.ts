@@ -60,7 +60,7 @@ export function parseLength(input: string, options: LengthOptions): LengthResult
   const relative =
     equals === '' && options.current !== undefined && (sign === '+' || (sign === '-' && mode === 'relative'));
   const signed = sign === '-' ? -size : size;
-  const mm = relative ? options.current! + signed : signed;
+  const mm = relative ? options.current + signed : signed;
   if (!Number.isFinite(mm) || Math.abs(mm) > LONGEST) return refuse('That is more than 100 m. Check the unit.');
   return { ok: true, mm: millimetres(mm + 0), relative };
 }

@@ -1,0 +1,35 @@
+// The door of the scene document.
+export * from './limits';
+export { loadScene, loadSceneText } from './load';
+export type { LoadResult } from './load';
+export { CURRENT_VERSION, migrate } from './migrations';
+export { poseFromRigid, rigidOf, worldPose } from './pose';
+export type { Refusal } from './references';
+export { pathText, refusalsOf } from './refusals';
+export { meshPathFault, sceneSchema } from './schema';
+export { CATEGORIES, SOURCES } from './types';
+export type {
+  BoxShape,
+  Category,
+  Component,
+  CylinderShape,
+  Display,
+  Group,
+  Hole,
+  Laser,
+  MeshShape,
+  Motion,
+  PairRule,
+  Pose,
+  Recipe,
+  Rules,
+  Scene,
+  Shape,
+  Side,
+  SlideStep,
+  Solid,
+  Source,
+  Step,
+  SwingStep,
+  Vec3,
+} from './types';
