@@ -33,3 +33,26 @@ export type {
   SwingStep,
   Vec3,
 } from './types';
+export { canonicalSceneText } from './canonical';
+export {
+  DEFAULT_GAPS,
+  DEFAULT_GENERAL,
+  defaultFor,
+  defaultTolerance,
+  isBodyPanel,
+  newScene,
+  ruleOrigin,
+} from './defaults';
+export type { DefaultGap } from './defaults';
+export {
+  applyDifference,
+  differenceSchema,
+  diffScenes,
+  invertDifference,
+  isEmptyDifference,
+  pairKey,
+  sameValue,
+  touchedComponents,
+} from './differences';
+export type { ApplyResult, Difference } from './differences';
+export * from './edits';
