@@ -2,6 +2,7 @@
 // Lengths stay lengths until a screen or a caption sets them in the reader's unit.
 import type { Finding, Report } from '#shared/check';
 import type { Component, Scene } from '#shared/scene';
+import { formatGap, formatNeed, formatPercent, type LengthDisplay } from '#shared/units';
 import { movesOf } from './directions';
 
 export type SentencePart =
@@ -135,4 +136,15 @@ export function reportSentence(scene: Scene, report: Report): Sentence {
         finding,
       };
   }
+}
+
+/** A sentence as plain text in the reader's unit, for captions and link previews. */
+export function sentenceText(parts: readonly SentencePart[], display: LengthDisplay): string {
+  return parts
+    .map((part) => {
+      if (typeof part === 'string') return part;
+      if ('gap' in part) return formatGap(part.gap, display);
+      return 'need' in part ? formatNeed(part.need, display) : formatPercent(part.percent);
+    })
+    .join('');
 }
