@@ -29,12 +29,16 @@ export function ensureNpmPackages({ quiet = false } = {}) {
     // no stamp: packages are missing or were installed by hand
   }
   if (!quiet) say('Installing npm packages from the lock file …');
-  const result = spawnSync('npm', ['install', '--no-save', '--include=dev', '--no-audit', '--no-fund', '--loglevel=error'], {
-    cwd: ROOT,
-    encoding: 'utf8',
-    stdio: ['ignore', 'pipe', 'pipe'],
-    env: { ...process.env, NODE_ENV: 'development' },
-  });
+  const result = spawnSync(
+    'npm',
+    ['install', '--no-save', '--include=dev', '--no-audit', '--no-fund', '--loglevel=error'],
+    {
+      cwd: ROOT,
+      encoding: 'utf8',
+      stdio: ['ignore', 'pipe', 'pipe'],
+      env: { ...process.env, NODE_ENV: 'development' },
+    },
+  );
   if (result.error) fail(`npm could not be started (${result.error.message}). Install npm 11.`);
   if (result.status !== 0) {
     const text = `${result.stdout}\n${result.stderr}`;

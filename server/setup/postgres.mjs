@@ -68,7 +68,7 @@ async function withLock(file, work) {
       if (error.code !== 'EEXIST') throw error;
     }
     let holder = 0;
-    let alive = false;
+    let alive;
     try {
       holder = Number(fs.readFileSync(file, 'utf8'));
       process.kill(holder, 0);

@@ -53,7 +53,7 @@ await runOrFail('the product is brought up', async () => {
   const stop = () => {
     if (postgres?.startedHere) stopPostgres('main');
   };
-  let code = 1;
+  let code;
   try {
     ensureAllBuilt();
     const env = {

@@ -1,0 +1,141 @@
+// Jobs: a queue in PostgreSQL (graphile-worker), so that any server may do them and none is lost with the server that took it.
+import { hostname } from 'node:os';
+import { and, eq, inArray, lt, or, sql } from 'drizzle-orm';
+import { EventEmitter } from 'node:events';
+import { makeWorkerUtils, run, type Runner, type TaskList, type WorkerEvents } from 'graphile-worker';
+import type { Pool } from 'pg';
+import type { Logger } from 'pino';
+import { tables, type Database, type Queryable } from '../db/client';
+
+const { workerSeen } = tables;
+
+export interface JobNames {
+  'dry-fit': { readonly dryFitId: string };
+  sweep: Readonly<Record<string, never>>;
+}
+export type JobName = keyof JobNames;
+
+/** `signal` is aborted when the server stops; the job is then done again elsewhere. */
+export type JobHandlers = { readonly [N in JobName]: (payload: JobNames[N], signal: AbortSignal) => Promise<void> };
+
+export interface Jobs {
+  /** Puts a job in the queue, inside the caller's transaction if it has one. */
+  readonly add: <N extends JobName>(
+    tx: Queryable,
+    name: N,
+    payload: JobNames[N],
+    options?: { readonly key?: string },
+  ) => Promise<void>;
+}
+
+export const jobs: Jobs = {
+  async add(tx, name, payload, options = {}) {
+    await tx.execute(
+      sql`select graphile_worker.add_job(${name}::text, ${JSON.stringify(payload)}::json, job_key => ${options.key ?? null}::text, max_attempts => 5)`,
+    );
+  },
+};
+
+/** A worker that was not seen for this long is dead. */
+const DEAD_AFTER_MS = 60_000;
+const BEAT_MS = 15_000;
+
+export interface JobRunner {
+  readonly stop: () => Promise<void>;
+}
+
+interface RunnerOptions {
+  readonly db: Database;
+  readonly pool: Pool;
+  readonly concurrency: number;
+  readonly handlers: JobHandlers;
+  readonly log: Logger;
+}
+
+function isAlive(pid: number): boolean {
+  try {
+    process.kill(pid, 0);
+    return true;
+  } catch (error) {
+    return (error as NodeJS.ErrnoException).code === 'EPERM';
+  }
+}
+
+/** Gives the jobs of dead workers back: at once for those of this machine whose process is gone, else after a minute. */
+async function freeDeadWorkers(options: RunnerOptions, unlock: (ids: string[]) => Promise<void>): Promise<void> {
+  const { db } = options;
+  const here = await db.select().from(workerSeen).where(eq(workerSeen.host, hostname()));
+  const gone = here.filter((w) => w.pid !== process.pid && !isAlive(w.pid)).map((w) => w.workerId);
+  const dead = await db
+    .select({ id: workerSeen.workerId })
+    .from(workerSeen)
+    .where(
+      or(
+        lt(workerSeen.seenAt, new Date(Date.now() - DEAD_AFTER_MS)),
+        gone.length > 0 ? inArray(workerSeen.workerId, gone) : undefined,
+      ),
+    );
+  if (dead.length === 0) return;
+  const ids = dead.map((w) => w.id);
+  await unlock(ids);
+  await db.delete(workerSeen).where(inArray(workerSeen.workerId, ids));
+  options.log.warn({ workers: ids.length }, 'jobs of dead workers were given back');
+}
+
+/** Starts working on jobs. */
+export async function startJobs(options: RunnerOptions): Promise<JobRunner> {
+  const { db, pool, handlers, log } = options;
+  const utils = await makeWorkerUtils({ pgPool: pool });
+  const free = (): Promise<void> => freeDeadWorkers(options, (ids) => utils.forceUnlockWorkers(ids));
+  await free();
+  const stopping = new AbortController();
+  const taskList: TaskList = Object.fromEntries(
+    Object.entries(handlers).map(([name, handler]) => [
+      name,
+      (payload: unknown) => (handler as (p: unknown, s: AbortSignal) => Promise<void>)(payload, stopping.signal),
+    ]),
+  );
+  const events = new EventEmitter() as WorkerEvents;
+  const workers = new Set<string>();
+  const beat = async (): Promise<void> => {
+    for (const workerId of workers) {
+      await db
+        .insert(workerSeen)
+        .values({ workerId, host: hostname(), pid: process.pid })
+        .onConflictDoUpdate({ target: workerSeen.workerId, set: { seenAt: new Date() } });
+    }
+  };
+  const quietly = (work: Promise<void>): void => {
+    work.catch((error: unknown) => log.error({ err: error }, 'worker housekeeping failed'));
+  };
+  events.on('worker:create', ({ worker }) => {
+    workers.add(worker.workerId);
+    quietly(beat());
+  });
+  events.on('job:error', ({ job, error }) => log.warn({ job: job.task_identifier, err: error }, 'a job failed'));
+  const runner: Runner = await run({
+    pgPool: pool,
+    concurrency: options.concurrency,
+    taskList,
+    events,
+    noHandleSignals: true,
+    pollInterval: 1000,
+    crontab: '17 3 * * * sweep',
+  });
+  const beats = setInterval(() => quietly(beat()), BEAT_MS);
+  const frees = setInterval(() => quietly(free()), DEAD_AFTER_MS);
+  return {
+    async stop() {
+      clearInterval(beats);
+      clearInterval(frees);
+      stopping.abort();
+      await runner.stop();
+      if (workers.size > 0) {
+        await db
+          .delete(workerSeen)
+          .where(and(inArray(workerSeen.workerId, [...workers]), eq(workerSeen.pid, process.pid)));
+      }
+      await utils.release();
+    },
+  };
+}

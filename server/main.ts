@@ -1,0 +1,124 @@
+// Starts the server, and ends it: reads the settings, opens what it needs, listens; on a signal it finishes what is under
+// way and closes.
+import { existsSync } from 'node:fs';
+import type { Server } from 'node:http';
+import path from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { pino } from 'pino';
+import { createApp } from './app';
+import { createAuth } from './auth/auth';
+import { ConfigFault, readConfig } from './config';
+import { DEMO_PASSWORD, DEMO_PEOPLE } from './db/demo-people';
+import { openDatabase } from './db/client';
+import { runDryFitJob } from './dry-fits/run';
+import { createLimits } from './http/limits';
+import { jobs, startJobs } from './jobs/jobs';
+import { sweep } from './jobs/sweep';
+import { createMailer } from './mail/mailer';
+import { sweepIncoming } from './meshes/upload';
+import { createFileStore } from './storage/file-store';
+
+/** Requests that are under way get this long. */
+const DRAIN_MS = 3000;
+
+function listen(server: Server, port: number, host: string): Promise<void> {
+  return new Promise((resolve, reject) => {
+    server.once('error', reject);
+    server.listen(port, host, () => resolve());
+  });
+}
+
+function close(server: Server): Promise<void> {
+  return new Promise((resolve) => {
+    server.close(() => resolve());
+    server.closeIdleConnections();
+    setTimeout(() => server.closeAllConnections(), DRAIN_MS).unref();
+  });
+}
+
+async function main(): Promise<void> {
+  const config = readConfig(process.env);
+  const log = pino({ level: config.logLevel });
+  const database = openDatabase(config.databaseUrl, config.databasePool, (error) =>
+    log.error({ err: error }, 'database'),
+  );
+  const { db, pool } = database;
+  const mailer = createMailer(config, db, (error) => log.error({ err: error }, 'a mail was not sent'));
+  const limits = createLimits(pool);
+  const store = await createFileStore(config);
+  await sweepIncoming(config.files);
+  let isReady = true;
+  const auth = createAuth(db, config, mailer, limits);
+  const clientFolder = path.resolve(path.dirname(fileURLToPath(import.meta.url)), '../client');
+  const app = createApp(
+    { config, db, auth, mailer, store, jobs, limits, log, ready: () => isReady },
+    existsSync(clientFolder) ? { clientFolder } : {},
+  );
+  const runner = await startJobs({
+    db,
+    pool,
+    log,
+    concurrency: Math.max(1, config.dryFitWorkers),
+    handlers: {
+      'dry-fit': (payload, signal) => runDryFitJob({ db, store, log }, payload.dryFitId, signal),
+      sweep: () => sweep(db, store),
+    },
+  });
+  const { createServer } = await import('node:http');
+  const server = createServer(app);
+  // large meshes over slow lines take long; headers must not
+  server.requestTimeout = 30 * 60 * 1000;
+  server.headersTimeout = 20_000;
+
+  let isEnding = false;
+  const end = async (): Promise<void> => {
+    if (isEnding) return;
+    isEnding = true;
+    isReady = false;
+    await Promise.all([close(server), runner.stop()]);
+    mailer.close();
+    await database.close();
+  };
+  for (const signal of ['SIGINT', 'SIGTERM'] as const) {
+    process.on(signal, () => {
+      end().then(
+        () => process.exit(0),
+        (error: unknown) => {
+          log.error({ err: error }, 'the server did not end cleanly');
+          process.exit(1);
+        },
+      );
+    });
+  }
+  try {
+    await listen(server, config.port, config.host);
+  } catch (error) {
+    await end();
+    throw error;
+  }
+  announce(config.baseUrl, config.mode === 'local');
+}
+
+function announce(address: string, isLocal: boolean): void {
+  const lines = [`Gapwright is at ${address}`];
+  if (isLocal) {
+    lines.push(`Demo accounts, password "${DEMO_PASSWORD}":`);
+    for (const person of DEMO_PEOPLE) lines.push(`  ${person.role.padEnd(9)} ${person.email}`);
+    lines.push('Stop it with Ctrl-C.');
+  }
+  process.stdout.write(`${lines.join('\n')}\n`);
+}
+
+main().catch((error: unknown) => {
+  const { code } = error as NodeJS.ErrnoException;
+  const text =
+    error instanceof ConfigFault
+      ? error.message
+      : code === 'EADDRINUSE'
+        ? 'The port is taken by another program. Stop it, or set PORT to another one.'
+        : code === 'EACCES'
+          ? 'This user may not listen on that port. Set PORT to one above 1023.'
+          : `The server could not start: ${error instanceof Error ? error.message : String(error)}`;
+  process.stderr.write(`${text}\n`);
+  process.exit(1);
+});
