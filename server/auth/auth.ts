@@ -139,8 +139,6 @@ export function createAuth(
     limitAccount(req, limits).then(() => next(), next);
   });
   router.use((req: Request, res: Response, next: NextFunction) => {
-    // the library wants the whole path
-    req.url = req.originalUrl;
     handler(req, res).catch(next);
   });
   return {
