@@ -39,6 +39,9 @@ interface ListOptions {
 /** % and _ in a search are letters like others. */
 export const containing = (text: string): string => `%${text.replace(/[\\%_]/g, '\\$&')}%`;
 
+/** Written out: in a query of one table the builder leaves the table's name away, and a subquery would read its own id. */
+const OUTER_ID = sql.raw('"project"."id"');
+
 const ORDERS: Readonly<Record<ListOptions['sort'], SQL>> = {
   updated: sql`${project.updatedAt} desc, ${project.id}`,
   created: sql`${project.createdAt} desc, ${project.id}`,
@@ -55,15 +58,15 @@ export async function listProjectLines(db: Queryable, o: ListOptions): Promise<P
   const rows = await db
     .select({
       project,
-      scenes: sql<number>`(select count(*)::int from scene where scene.project_id = ${project.id} and scene.deleted_at is null)`,
+      scenes: sql<number>`(select count(*)::int from scene where scene.project_id = ${OUTER_ID} and scene.deleted_at is null)`,
       latest: sql<{ totals: Record<string, number>; at: string } | null>`(
         select json_build_object('totals', d.totals, 'at', d.ended_at)
         from dry_fit d join scene s on s.id = d.scene_id
-        where s.project_id = ${project.id} and s.deleted_at is null and d.state = 'done'
+        where s.project_id = ${OUTER_ID} and s.deleted_at is null and d.state = 'done'
         order by d.created_at desc limit 1)`,
       pictureId: sql<string | null>`(
         select p.id from picture p join revision r on r.id = p.revision_id join scene s on s.id = r.scene_id
-        where s.project_id = ${project.id} and s.deleted_at is null and p.kind = 'view'
+        where s.project_id = ${OUTER_ID} and s.deleted_at is null and p.kind = 'view'
         order by p.created_at desc limit 1)`,
     })
     .from(project)
