@@ -7,6 +7,8 @@ export default defineConfig({
   plugins: [react(), tailwindcss()],
   build: { outDir: 'dist/client', emptyOutDir: true, target: 'es2023' },
   worker: { format: 'es' },
+  // `npm run dev`: pages come from here, the API from the server beside it
+  server: { proxy: { '/api': `http://127.0.0.1:${process.env['PORT'] ?? '4180'}` } },
   test: {
     include: ['tests/**/*.test.ts', 'tests/**/*.test.tsx'],
     exclude: ['tests/bench/**', 'node_modules/**'],

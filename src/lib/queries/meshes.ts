@@ -1,0 +1,13 @@
+import { keepPreviousData, queryOptions } from '@tanstack/react-query';
+import type { z } from 'zod';
+import { listMeshes } from '#shared/api';
+import { callApi } from '../api';
+
+type MeshListQuery = z.input<typeof listMeshes.query>;
+
+export const meshesQuery = (teamId: string, query: MeshListQuery) =>
+  queryOptions({
+    queryKey: ['team', teamId, 'meshes', query],
+    queryFn: ({ signal }) => callApi(listMeshes, { params: { teamId }, query, signal }),
+    placeholderData: keepPreviousData,
+  });
