@@ -5,17 +5,18 @@ import { Menu, MenuItem, MenuLabel, MenuLink, MenuRule } from '../components/men
 import { BendMark } from '../components/pictograms';
 import { notify } from '../components/toast';
 import { signOut } from '../lib/auth-calls';
-import { meQuery, serverFactsQuery } from '../lib/queries/account';
+import { meQuery, serverFactsQuery, sessionQuery } from '../lib/queries/account';
 
 /** The person's tag in the head: teams, account, the way out. */
 export function AccountTag() {
-  const me = useQuery({ ...meQuery(), retry: false });
+  const session = useQuery(sessionQuery());
+  const me = useQuery({ ...meQuery(), enabled: session.data === true });
   const facts = useQuery(serverFactsQuery());
   const queryClient = useQueryClient();
   const navigate = useNavigate();
 
   if (me.data === undefined) {
-    return me.isError ? (
+    return session.data === false ? (
       <Link to="/sign-in" className="link font-semibold">
         Sign in
       </Link>
@@ -37,7 +38,7 @@ export function AccountTag() {
       trigger={
         <button
           type="button"
-          className="cut-tag flex min-h-10 max-w-[60vw] items-center gap-2.5 py-1 pr-3 pl-3.5 font-semibold"
+          className="cut-tag flex min-h-10 max-w-60 min-w-0 items-center gap-2.5 py-1 pr-3 pl-3.5 font-semibold"
         >
           <Hole />
           <span className="truncate">{name}</span>

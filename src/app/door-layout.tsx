@@ -1,5 +1,6 @@
 // In front of the product: what it is, scribed on dye, and beside it the form to come in.
 import { Link, Outlet } from 'react-router-dom';
+import { Hole } from '../components/hole';
 import { SteelScale } from '../components/steel-scale';
 import { Wordmark } from '../components/wordmark';
 import { ZoneDrawing } from '../components/zone-drawing';
@@ -10,7 +11,7 @@ export const DoorLayout = () => (
       aria-label="What Gapwright is"
       className="on-dye relative flex min-h-56 flex-col overflow-hidden bg-ground lg:min-h-dvh"
     >
-      <ZoneDrawing className="absolute inset-0 h-full w-full opacity-45 lg:opacity-100" />
+      <ZoneDrawing className="absolute inset-0 h-full w-full opacity-40 lg:opacity-100" />
       <div className="relative grid gap-2 bg-gradient-to-b from-dye-deep/95 via-dye-deep/60 to-transparent px-5 pt-5 pb-10 sm:px-10 sm:pt-9">
         <Link to="/sign-in" aria-label="Gapwright" className="w-fit text-3xl no-underline">
           <Wordmark />
@@ -25,16 +26,19 @@ export const DoorLayout = () => (
       <main
         id="main"
         tabIndex={-1}
-        className="mx-auto grid w-full max-w-md grow content-start px-5 py-8 lg:content-center lg:py-12"
+        className="mx-auto grid w-full max-w-lg grow content-start py-6 sm:px-5 sm:py-10 lg:content-center"
       >
-        <Outlet />
+        <div className="cut px-5 [--cut:30px] max-sm:[--paper-edge:transparent] max-sm:[--paper:transparent] sm:px-9 sm:pt-6 sm:pb-9">
+          <Hole ring className="mb-5 !hidden !h-3.5 !w-3.5 sm:!inline-block" />
+          <Outlet />
+        </div>
       </main>
-      <p className="mx-auto w-full max-w-md px-5 pb-6 text-sm text-soft">
+      <footer className="mx-auto w-full max-w-lg px-5 pb-6 text-sm text-soft">
         The check is geometric and only as good as the measurements.{' '}
         <Link to="/help/cautions" className="link">
           Read the cautions
         </Link>
-      </p>
+      </footer>
     </div>
   </div>
 );

@@ -18,7 +18,7 @@ export function OfflineStrip() {
       {!isOnline && (
         <p className="flex items-center justify-center gap-2 bg-laser px-4 py-1.5 text-sm font-semibold text-ink">
           <PlateMark />
-          No connection. What you see may be old, and changes wait until it is back.
+          No connection. What you see may be old; nothing can be changed until it is back.
         </p>
       )}
     </div>

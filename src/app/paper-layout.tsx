@@ -9,7 +9,7 @@ export const PaperLayout = () => (
   <div className="on-card flex min-h-dvh flex-col bg-ground">
     <header className="no-print">
       <div className="mx-auto flex max-w-[72rem] items-center justify-between gap-4 px-4 py-3 sm:px-8">
-        <Link to="/" aria-label="Gapwright, to your teams" className="py-1 text-2xl no-underline">
+        <Link to="/" aria-label="Gapwright, to your teams" className="flex-none py-1 text-2xl no-underline">
           <Wordmark />
         </Link>
         <AccountTag />

@@ -24,7 +24,7 @@ export function Dialog({ open, onOpenChange, title, lead, wide = false, children
             className={classes('on-card cut sheet', wide && 'sheet-wide')}
             {...(lead === undefined ? { 'aria-describedby': undefined } : {})}
           >
-            <header className="mb-4 flex items-start gap-3 pr-3">
+            <header className="mb-4 flex items-start gap-3 pr-12">
               <Hole ring through="var(--dye)" className="mt-2 ml-1" />
               <div className="grow pl-1">
                 <Radix.Title className="text-xl font-extrabold">{title}</Radix.Title>
@@ -34,11 +34,12 @@ export function Dialog({ open, onOpenChange, title, lead, wide = false, children
                   </Radix.Description>
                 )}
               </div>
-              <Radix.Close className="icon-button" aria-label="Close">
-                <CrossMark />
-              </Radix.Close>
             </header>
             {children}
+            {/* last, so that the first field gets the focus */}
+            <Radix.Close className="icon-button !absolute top-5 right-7 max-sm:top-3 max-sm:right-6" aria-label="Close">
+              <CrossMark />
+            </Radix.Close>
           </Radix.Content>
         </Radix.Overlay>
       </Radix.Portal>

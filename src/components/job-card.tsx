@@ -1,13 +1,13 @@
 import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
+import { BlankStub } from './blank-stub';
 import { Hole } from './hole';
-import { ZoneDrawing } from './zone-drawing';
 
 export interface JobCardProps {
   readonly title: string;
   /** Where the card leads; null: it leads nowhere (it is deleted, say). */
   readonly to: string | null;
-  /** The address of its picture; null: a drawing stands in. */
+  /** The address of its picture; null: there is none yet. */
   readonly picture: string | null;
   readonly pictureAlt: string;
   /** The lines under the title. */
@@ -25,7 +25,7 @@ export function JobCard({ title, to, picture, pictureAlt, children, figures, men
   return (
     <article className="job-card cut">
       <div className="job-stub">
-        {picture === null ? <ZoneDrawing small /> : <img src={picture} alt={pictureAlt} loading="lazy" />}
+        {picture === null ? <BlankStub /> : <img src={picture} alt={pictureAlt} loading="lazy" />}
         <Hole />
       </div>
       <div className="min-w-0 px-4 py-3.5 sm:px-5">

@@ -50,7 +50,7 @@ export function PageHead({ title, crumbs, lead, actions }: PageHeadProps) {
     <header className="mb-6">
       {crumbs !== undefined && crumbs.length > 0 && <Breadcrumbs crumbs={crumbs} />}
       <div className="mt-1 flex flex-wrap items-end justify-between gap-x-6 gap-y-3">
-        <div className="min-w-0 grow basis-72">
+        <div className="min-w-0 grow basis-48">
           <h1 className="text-3xl leading-tight font-light break-words sm:text-4xl">{title}</h1>
           {lead !== undefined && <div className="mt-1 text-soft">{lead}</div>}
         </div>

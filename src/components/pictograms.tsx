@@ -89,10 +89,10 @@ export const PersonMark = (p: MarkProps) => (
   </Mark>
 );
 
-/** Bring a file in: a sheet laid into a tray. */
-export const TrayMark = (p: MarkProps) => (
+/** A mesh: a corner of a fender in triangles. */
+export const MeshMark = (p: MarkProps) => (
   <Mark {...p}>
-    <path d="M2.5 11v6h15v-6M10 2.5V12M6.2 8.4 10 12.2l3.8-3.8" />
+    <path d="M1.5 17.5 4 9.5l5-5 9-2-3 7-2 8zM4 9.5l11 0M9 4.5l6 5M1.5 17.5 15 9.5M4 9.5l9 8" strokeLinejoin="round" />
   </Mark>
 );
 

@@ -70,7 +70,7 @@ export interface CellProps extends ComponentPropsWithRef<'td'> {
 export const Cell = ({ head, figures = false, className, ...rest }: CellProps) => (
   <td
     data-head={head}
-    className={classes('px-2 py-2.5 align-top', figures && 'figures text-right', className)}
+    className={classes('sm:px-2 sm:py-2.5', figures && 'figures sm:text-right', className)}
     {...rest}
   />
 );

@@ -59,6 +59,16 @@ async function post(path: string, body: Readonly<Record<string, unknown>>): Prom
   return { ok: false, code: problem.code, sentence: tell(problem).sentence };
 }
 
+/** Whether somebody is signed in at all; for pages that are open to everybody. */
+export async function hasSession(): Promise<boolean> {
+  try {
+    const response = await fetch('/api/auth/get-session', { credentials: 'same-origin' });
+    return response.ok && (await response.json()) !== null;
+  } catch {
+    return false;
+  }
+}
+
 /** The page that a confirming link comes back to. */
 const confirmedPath = (back: string): string =>
   back === '/' ? '/confirmed' : `/confirmed?back=${encodeURIComponent(back)}`;

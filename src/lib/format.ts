@@ -27,7 +27,7 @@ const DAY = 24 * 60 * 60 * 1000;
 /** A moment: `16:20` today, `yesterday, 16:20`, `14 May, 16:20` this year, else with the year. */
 export function formatWhen(iso: string, now: Date, locale?: string): string {
   const at = new Date(iso);
-  const time = new Intl.DateTimeFormat(locale, { hour: '2-digit', minute: '2-digit' }).format(at);
+  const time = new Intl.DateTimeFormat(locale, { hour: 'numeric', minute: '2-digit' }).format(at);
   const startOfDay = (d: Date): number => new Date(d.getFullYear(), d.getMonth(), d.getDate()).getTime();
   const days = Math.round((startOfDay(now) - startOfDay(at)) / DAY);
   if (days === 0) return `today, ${time}`;

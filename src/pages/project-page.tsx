@@ -3,6 +3,7 @@ import { useState } from 'react';
 import { useNavigate, useParams } from 'react-router-dom';
 import { mayShow } from '#shared/access';
 import { ButtonLink } from '../components/button';
+import { Hole } from '../components/hole';
 import { IconButton } from '../components/icon-button';
 import { Menu, MenuItem, MenuRule } from '../components/menu';
 import { PageHead, Section } from '../components/page-head';
@@ -80,8 +81,8 @@ function ProjectSheet({ project }: { readonly project: Project }) {
       />
       <div className="grid gap-x-12 gap-y-10 lg:grid-cols-[minmax(0,1fr)_19rem]">
         <SceneList projectId={project.id} mayChange={mayShow(project.role, 'scene.change')} />
-        <div className="grid content-start gap-8 sm:grid-cols-2 lg:grid-cols-1">
-          <Section title="Job">
+        <div className="ticket cut self-start">
+          <Section title="Job card" actions={<Hole ring className="mr-3 !h-3.5 !w-3.5" />}>
             <ProjectFacts project={project} />
           </Section>
           {mayShow(project.role, 'guests.read') && (

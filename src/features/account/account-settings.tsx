@@ -10,6 +10,7 @@ import { Length } from '../../components/fraction';
 import { Section } from '../../components/page-head';
 import { TextField } from '../../components/text-field';
 import { notify } from '../../components/toast';
+import { useHeld } from '../../components/use-held';
 import { callApi } from '../../lib/api';
 import { sayProblem } from '../../lib/api-problem';
 import { useMe } from '../../lib/me';
@@ -76,14 +77,18 @@ type DisplayChoice = 'project' | 'in' | 'in-decimal' | 'mm';
 export function UnitSetting() {
   const me = useMe();
   const change = useChangeMe();
+  const [display, hold, letGo] = useHeld(me.display);
   return (
     <Section title="Lengths">
       <Choice<DisplayChoice>
         legend="How lengths are shown to you, in every project"
         name="display"
-        value={me.display ?? 'project'}
-        disabled={change.isPending}
-        onChange={(value) => change.mutate({ display: value === 'project' ? null : value })}
+        value={display ?? 'project'}
+        onChange={(value) => {
+          const next = value === 'project' ? null : value;
+          hold(next);
+          change.mutate({ display: next }, { onError: letGo });
+        }}
         options={[
           { value: 'project', label: 'As each project has it' },
           { value: 'in', label: <Sample text="Inches and fractions" display="in" /> },
@@ -105,14 +110,17 @@ const Sample = ({ text, display }: { readonly text: string; readonly display: 'i
 export function WordSetting() {
   const me = useMe();
   const change = useChangeMe();
+  const [words, hold, letGo] = useHeld(me.words);
   return (
     <Section title="Names of parts">
       <Choice
         legend="What the parts of a car are called"
         name="words"
-        value={me.words}
-        disabled={change.isPending}
-        onChange={(words) => change.mutate({ words })}
+        value={words}
+        onChange={(next) => {
+          hold(next);
+          change.mutate({ words: next }, { onError: letGo });
+        }}
         options={[
           { value: 'us', label: 'Hood, cowl, firewall, fender', hint: 'as in the United States' },
           { value: 'uk', label: 'Bonnet, scuttle, bulkhead, wing', hint: 'as in the United Kingdom' },

@@ -49,6 +49,9 @@ export function MailShelf() {
   );
 }
 
+/** Tokens make addresses long; what follows the first of it says nothing to a reader. */
+const shorten = (address: string): string => (address.length > 72 ? `${address.slice(0, 64)}…` : address);
+
 /** The text with its addresses as links; only ours lead on. */
 function MailText({ text }: { readonly text: string }) {
   return (
@@ -59,7 +62,7 @@ function MailText({ text }: { readonly text: string }) {
         .map((piece, i) =>
           i % 2 === 1 ? (
             <a key={i} href={piece} className="link font-semibold break-all">
-              {piece}
+              {shorten(piece)}
             </a>
           ) : (
             piece

@@ -5,6 +5,7 @@ import { Button } from '../../components/button';
 import { SearchField } from '../../components/search-field';
 import { EmptyState, ErrorState, LoadingState } from '../../components/states';
 import { Head, SortHead, Table } from '../../components/table';
+import { Select } from '../../components/text-field';
 import { tell } from '../../lib/api-problem';
 import { displayFor, useMe } from '../../lib/me';
 import { meshesQuery } from '../../lib/queries/meshes';
@@ -58,12 +59,21 @@ export function MeshList({ teamId, mayChange }: MeshListProps) {
           ))}
         </div>
       )}
-      <SearchField
-        label="Search the meshes"
-        value={search}
-        className="mb-4 max-w-md"
-        onSearch={(text) => set('search', text)}
-      />
+      <div className="mb-4 grid max-w-md gap-3">
+        <SearchField label="Search the meshes" value={search} onSearch={(text) => set('search', text)} />
+        {/* where the table has no head to sort by */}
+        <Select
+          label="Order"
+          labelHidden
+          className="sm:!hidden"
+          value={sort}
+          onChange={(event) => set('sort', event.target.value === 'created' ? '' : event.target.value)}
+        >
+          <option value="created">last brought in</option>
+          <option value="name">by name</option>
+          <option value="triangles">most triangles</option>
+        </Select>
+      </div>
       {meshes.isPending && <LoadingState what="the meshes" />}
       {meshes.isError && <ErrorState {...tell(meshes.error)} onRetry={() => void meshes.refetch()} />}
       {isNone && (

@@ -34,9 +34,9 @@ export function MeshRow({ mesh, display, mayChange }: MeshRowProps) {
   const close = (): void => setAsks(null);
   const rename = useChangeMesh(mesh, close);
   return (
-    <Row>
+    <Row className="mesh-row">
       <Cell>
-        <div className="flex gap-3.5">
+        <div className="flex items-center gap-3.5">
           <MeshPicture mesh={mesh} className="h-14 w-22 flex-none" />
           <span className="min-w-0 font-bold break-words">{mesh.name}</span>
         </div>

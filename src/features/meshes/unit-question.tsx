@@ -24,7 +24,7 @@ export function UnitQuestion({ mesh, display }: UnitQuestionProps) {
       aria-label={`Unit of ${mesh.name}`}
       className="cut grid gap-5 p-4 [--paper-edge:var(--laser)] sm:grid-cols-[11rem_1fr] sm:p-5"
     >
-      <MeshPicture mesh={mesh} className="h-32 w-full sm:h-full" />
+      <MeshPicture mesh={mesh} className="h-36 w-full" />
       <div className="grid gap-3">
         <div>
           <h3 className="text-lg font-extrabold break-all">{mesh.name}</h3>

@@ -1,7 +1,7 @@
 import { useQueryClient } from '@tanstack/react-query';
 import { useEffect, useId, useRef, useState, type DragEvent } from 'react';
 import { Button } from '../../components/button';
-import { TrayMark } from '../../components/pictograms';
+import { MeshMark } from '../../components/pictograms';
 import { ProgressBar } from '../../components/progress-bar';
 import { ErrorState } from '../../components/states';
 import { notify } from '../../components/toast';
@@ -54,7 +54,7 @@ export function UploadTray({ teamId }: { readonly teamId: string }) {
           bring(event.dataTransfer.files);
         }}
       >
-        <TrayMark className="!h-9 !w-9 text-soft" strokeWidth={1} />
+        <MeshMark className="!h-9 !w-9 text-soft" strokeWidth={1} />
         <div className="grow basis-60">
           <p className="font-bold">{isOver ? 'Let go to bring it in' : 'Bring in STL files'}</p>
           <p className="text-sm text-soft" id={`${id}-hint`}>
@@ -98,8 +98,8 @@ function UploadLine({ upload, onDrop }: { readonly upload: Upload; readonly onDr
   if (state === 'failed') {
     return (
       <ErrorState
-        sentence={`“${name}” was not taken in.`}
-        detail={problem}
+        sentence={problem?.startsWith(name) === true ? problem : `“${name}” was not taken in.`}
+        detail={problem?.startsWith(name) === true ? null : problem}
         action={
           <Button size="small" onClick={onDrop}>
             Put away

@@ -11,14 +11,21 @@ import { countOf } from '../../lib/format';
 import { LatestCheck } from './latest-check';
 import { useProjectDeeds } from './use-project-deeds';
 
+export interface ProjectCardProps {
+  readonly project: ProjectLine;
+  /** The rank of its title on the page. */
+  readonly headingLevel: 2 | 3;
+}
+
 /** One project on its card. */
-export function ProjectCard({ project }: { readonly project: ProjectLine }) {
+export function ProjectCard({ project, headingLevel }: ProjectCardProps) {
   const deeds = useProjectDeeds(project);
   const isDeleted = project.deletedAt !== null;
   const mayChange = mayShow(project.role, 'project.change');
   const { pictureId } = project;
   return (
     <JobCard
+      headingLevel={headingLevel}
       title={project.name}
       to={isDeleted ? null : `/projects/${project.id}`}
       picture={pictureId === null ? null : addressOf(readPicture, { pictureId })}

@@ -77,7 +77,7 @@ export function ProjectList({ teamId, empty, mayRestore }: ProjectListProps) {
       <JobRack label="Projects">
         {projects.map((project) => (
           <li key={project.id}>
-            <ProjectCard project={project} />
+            <ProjectCard project={project} headingLevel={2} />
           </li>
         ))}
       </JobRack>

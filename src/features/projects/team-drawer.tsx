@@ -59,7 +59,7 @@ export function TeamDrawer({ team }: TeamDrawerProps) {
       <JobRack label={`Projects of ${team.name}`}>
         {projects.map((project) => (
           <li key={project.id}>
-            <ProjectCard project={project} />
+            <ProjectCard project={project} headingLevel={3} />
           </li>
         ))}
       </JobRack>

@@ -66,8 +66,7 @@ export function PeopleBoard({ team }: PeopleBoardProps) {
       <PeopleTable
         teamId={team.id}
         role={team.role}
-        busy={change.isPending}
-        onChangeRole={(person, role) => change.mutate({ person, role })}
+        onChangeRole={(person, role, letGo) => change.mutate({ person, role }, { onError: letGo })}
         onRemove={(person) => {
           remove.reset();
           setLeaving(person);

@@ -5,6 +5,7 @@ import { Button } from '../../components/button';
 import { ErrorState, LoadingState } from '../../components/states';
 import { Cell, Head, Row, Table } from '../../components/table';
 import { Select } from '../../components/text-field';
+import { useHeld } from '../../components/use-held';
 import { When } from '../../components/when';
 import { tell } from '../../lib/api-problem';
 import { useMe } from '../../lib/me';
@@ -13,14 +14,14 @@ import { peopleQuery } from '../../lib/queries/teams';
 export interface PeopleTableProps {
   readonly teamId: string;
   readonly role: Role;
-  readonly busy: boolean;
-  readonly onChangeRole: (person: Person, role: Role) => void;
+  /** `letGo` takes the choice back where it could not be kept. */
+  readonly onChangeRole: (person: Person, role: Role, letGo: () => void) => void;
   readonly onRemove: (person: Person) => void;
   readonly onHandOver: (person: Person) => void;
 }
 
 /** Everybody in the team. Owners change and remove; the others read. */
-export function PeopleTable({ teamId, role, busy, onChangeRole, onRemove, onHandOver }: PeopleTableProps) {
+export function PeopleTable({ teamId, role, onChangeRole, onRemove, onHandOver }: PeopleTableProps) {
   const people = useQuery(peopleQuery(teamId));
   const me = useMe();
   const mayChange = mayShow(role, 'people.change');
@@ -54,26 +55,7 @@ export function PeopleTable({ teamId, role, busy, onChangeRole, onRemove, onHand
             <Cell head="Mail address" className="break-all">
               {person.email}
             </Cell>
-            <Cell head="Role">
-              {mayChange ? (
-                <Select
-                  label={`Role of ${person.name}`}
-                  labelHidden
-                  className="!inline-grid w-36"
-                  value={person.role}
-                  disabled={busy}
-                  onChange={(event) => onChangeRole(person, event.target.value as Role)}
-                >
-                  {ROLES.map((each) => (
-                    <option key={each} value={each}>
-                      {each}
-                    </option>
-                  ))}
-                </Select>
-              ) : (
-                person.role
-              )}
-            </Cell>
+            <Cell head="Role">{mayChange ? <RoleSelect person={person} onChange={onChangeRole} /> : person.role}</Cell>
             <Cell head="Since">
               <When iso={person.since} />
             </Cell>
@@ -82,14 +64,12 @@ export function PeopleTable({ teamId, role, busy, onChangeRole, onRemove, onHand
                 {!isMe && (
                   <span className="inline-flex flex-wrap gap-x-4 gap-y-1 sm:justify-end">
                     {person.role !== 'owner' && (
-                      <Button kind="text" size="small" disabled={busy} onClick={() => onHandOver(person)}>
-                        Hand over to
-                        <span className="sr-only"> {person.name}</span>
+                      <Button kind="text" size="small" onClick={() => onHandOver(person)}>
+                        Hand over<span className="sr-only"> to {person.name}</span>
                       </Button>
                     )}
-                    <Button kind="text" size="small" disabled={busy} onClick={() => onRemove(person)}>
-                      Remove
-                      <span className="sr-only"> {person.name}</span>
+                    <Button kind="text" size="small" onClick={() => onRemove(person)}>
+                      Remove<span className="sr-only"> {person.name}</span>
                     </Button>
                   </span>
                 )}
@@ -99,5 +79,33 @@ export function PeopleTable({ teamId, role, busy, onChangeRole, onRemove, onHand
         );
       })}
     </Table>
+  );
+}
+
+interface RoleSelectProps {
+  readonly person: Person;
+  readonly onChange: (person: Person, role: Role, letGo: () => void) => void;
+}
+
+function RoleSelect({ person, onChange }: RoleSelectProps) {
+  const [role, hold, letGo] = useHeld(person.role);
+  return (
+    <Select
+      label={`Role of ${person.name}`}
+      labelHidden
+      className="!inline-grid w-36"
+      value={role}
+      onChange={(event) => {
+        const next = event.target.value as Role;
+        hold(next);
+        onChange(person, next, letGo);
+      }}
+    >
+      {ROLES.map((each) => (
+        <option key={each} value={each}>
+          {each}
+        </option>
+      ))}
+    </Select>
   );
 }
