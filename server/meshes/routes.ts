@@ -5,6 +5,7 @@ import {
   changeMesh,
   deleteMesh,
   listMeshes,
+  listProjectMeshes,
   readDisplayMesh,
   readMesh,
   readMeshFile,
@@ -16,7 +17,7 @@ import { ApiError } from '../http/api-error';
 import { mount, SENT } from '../http/mount';
 import { sendBytes, sendFile } from '../http/send-file';
 import type { Services } from '../http/services';
-import { displayKey, displayMesh, guessUnit, judgeFile, listMeshLines, meshKey } from './rules';
+import { displayKey, displayMesh, guessUnit, judgeFile, listMeshLines, meshesOfProject, meshKey } from './rules';
 import { incomingOf, readUpload, type Incoming } from './upload';
 
 const { mesh, project, revision, scene } = tables;
@@ -39,6 +40,8 @@ export function meshRoutes(router: Router, services: Services): void {
   };
 
   mount(router, services, listMeshes, ({ params, query }) => listMeshLines(db, params.teamId, query));
+
+  mount(router, services, listProjectMeshes, ({ params }) => meshesOfProject(db, params.projectId));
 
   const keep = async (incoming: Incoming, teamId: string, personId: string, signal: AbortSignal) => {
     const judged = await judgeFile(incoming.file, signal);

@@ -1,12 +1,12 @@
 // What is kept about meshes, for other resources too.
-import { and, eq, sql } from 'drizzle-orm';
+import { and, asc, eq, isNull, sql } from 'drizzle-orm';
 import { MESH_UNITS, type MeshLine, type MeshUnit } from '#shared/api';
 import { tables, type Queryable } from '../db/client';
 import { runThread } from '../jobs/thread';
 import type { FileStore } from '../storage/file-store';
 import type { MeshAnswer, MeshFacts } from './worker';
 
-const { mesh, user } = tables;
+const { mesh, project, scene, user } = tables;
 
 export const meshKey = (teamId: string, sha256: string): string => `meshes/${teamId}/${sha256}.stl`;
 export const displayKey = (teamId: string, sha256: string): string => `displays/${teamId}/${sha256}.gwdm`;
@@ -96,4 +96,23 @@ export async function listMeshLines(
     .orderBy(order, mesh.sha256)
     .limit(1000);
   return rows.map((r) => describe(r.mesh, r.by));
+}
+
+/** The meshes that a project's scenes use, with the names of those scenes. */
+export async function meshesOfProject(db: Queryable, projectId: string) {
+  const rows = await db
+    .select({
+      sha256: mesh.sha256,
+      name: mesh.name,
+      unit: mesh.unit,
+      kind: mesh.kind,
+      scenes: sql<string[]>`array_agg(${scene.name} order by lower(${scene.name}))`,
+    })
+    .from(scene)
+    .innerJoin(project, eq(project.id, scene.projectId))
+    .innerJoin(mesh, and(eq(mesh.teamId, project.teamId), sql`${mesh.sha256} = any(${scene.meshes})`))
+    .where(and(eq(scene.projectId, projectId), isNull(scene.deletedAt)))
+    .groupBy(mesh.teamId, mesh.sha256)
+    .orderBy(asc(sql`lower(${mesh.name})`), mesh.sha256);
+  return rows.map((row) => ({ ...row, unit: row.unit as MeshUnit | null }));
 }

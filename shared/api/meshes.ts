@@ -44,6 +44,16 @@ export const listMeshes = defineEndpoint({
   }),
   response: z.array(mesh),
 });
+/** The meshes that the open scenes of a project use, and in which. */
+export const listProjectMeshes = defineEndpoint({
+  method: 'GET',
+  path: '/projects/:projectId/meshes',
+  who: may('project.read', 'project', 'projectId'),
+  params: z.object({ projectId: rowId }),
+  response: z.array(
+    mesh.pick({ sha256: true, name: true, unit: true, kind: true }).extend({ scenes: z.array(z.string()) }),
+  ),
+});
 /** One file in the field `file`. Answers 200 with what is there if the team has the file already. */
 export const uploadMesh = defineEndpoint({
   method: 'POST',
