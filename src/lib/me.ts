@@ -3,6 +3,7 @@ import { useSuspenseQuery } from '@tanstack/react-query';
 import type { Me } from '#shared/api';
 import type { Role } from '#shared/access';
 import type { LengthDisplay } from '#shared/units';
+import { inWords } from './part-words';
 import { meQuery } from './queries/account';
 
 /** Only below the guard that has read it already, so it never waits there. */
@@ -22,4 +23,10 @@ export function displayFor(
   document?: LengthDisplay,
 ): LengthDisplay {
   return me?.display ?? project ?? document ?? 'mm';
+}
+
+/** Turns the product's own texts into the person's words for parts. */
+export function useWords(): (text: string) => string {
+  const { words } = useMe();
+  return (text) => inWords(text, words);
 }

@@ -1,6 +1,6 @@
 // The one cache of what the server owns.
-import { MutationCache, QueryClient } from '@tanstack/react-query';
-import { ApiProblem } from './api-problem';
+import { MutationCache, QueryCache, QueryClient } from '@tanstack/react-query';
+import { ApiProblem, isProblem } from './api-problem';
 
 /** Trying again helps where the server or the way to it failed, not where it said no. */
 function isWorthRetrying(error: unknown): boolean {
@@ -8,7 +8,11 @@ function isWorthRetrying(error: unknown): boolean {
 }
 
 export function createQueryClient(onMutationError: (error: unknown) => void): QueryClient {
-  return new QueryClient({
+  /** A session that has ended is seen by whatever asks next; asking for the person again lets the guard send to the door. */
+  const watchSession = (error: unknown): void => {
+    if (isProblem(error, 'session/missing')) void client.invalidateQueries({ queryKey: ['me'] });
+  };
+  const client: QueryClient = new QueryClient({
     defaultOptions: {
       queries: {
         staleTime: 10_000,
@@ -19,13 +23,20 @@ export function createQueryClient(onMutationError: (error: unknown) => void): Qu
       },
       mutations: { retry: false, networkMode: 'always' },
     },
+    queryCache: new QueryCache({
+      onError: (error, query) => {
+        if (query.queryKey[0] !== 'me') watchSession(error);
+      },
+    }),
     mutationCache: new MutationCache({
       onError: (error, _variables, _context, mutation) => {
+        watchSession(error);
         // a form shows its problem itself
         if (mutation.meta?.['shownInPlace'] !== true) onMutationError(error);
       },
     }),
   });
+  return client;
 }
 
 /** For mutations whose caller shows the problem where it happened. */

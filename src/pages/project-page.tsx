@@ -2,6 +2,7 @@ import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { useNavigate, useParams } from 'react-router-dom';
 import { mayShow } from '#shared/access';
+import type { Project } from '#shared/api';
 import { ButtonLink } from '../components/button';
 import { Hole } from '../components/hole';
 import { IconButton } from '../components/icon-button';
@@ -10,6 +11,7 @@ import { PageHead, Section } from '../components/page-head';
 import { HolesMark } from '../components/pictograms';
 import { Stamp } from '../components/stamp';
 import { ErrorState, LoadingState } from '../components/states';
+import { ProjectMeshes } from '../features/meshes/project-meshes';
 import { ActivityList } from '../features/projects/activity-list';
 import { GuestList } from '../features/projects/guest-list';
 import { ProjectFactsDialog } from '../features/projects/project-dialog';
@@ -20,7 +22,6 @@ import { tell } from '../lib/api-problem';
 import { useMe } from '../lib/me';
 import { projectQuery } from '../lib/queries/projects';
 import { usePageTitle } from '../lib/use-page-title';
-import type { Project } from '#shared/api';
 
 export function Component() {
   const { projectId = '' } = useParams();
@@ -84,6 +85,9 @@ function ProjectSheet({ project }: { readonly project: Project }) {
         <div className="ticket cut self-start">
           <Section title="Job card" actions={<Hole ring className="mr-3 !h-3.5 !w-3.5" />}>
             <ProjectFacts project={project} />
+          </Section>
+          <Section title="Meshes" note="in its scenes">
+            <ProjectMeshes projectId={project.id} teamId={project.teamId} linked={mayShow(project.role, 'mesh.list')} />
           </Section>
           {mayShow(project.role, 'guests.read') && (
             <Section title="Guests" note="may read along">

@@ -2,13 +2,13 @@ import { zodResolver } from '@hookform/resolvers/zod';
 import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import { useForm } from 'react-hook-form';
-import { Link, useNavigate, useSearchParams } from 'react-router-dom';
+import { Link, Navigate, useNavigate, useSearchParams } from 'react-router-dom';
 import { z } from 'zod';
 import { Button } from '../../components/button';
 import { FormFault } from '../../components/form-fault';
 import { TextField } from '../../components/text-field';
 import { signIn } from '../../lib/auth-calls';
-import { serverFactsQuery } from '../../lib/queries/account';
+import { serverFactsQuery, sessionQuery } from '../../lib/queries/account';
 import { safePath, withBack } from '../../lib/return-path';
 import { emailField, passwordField } from './account-fields';
 import { DemoPeople } from './demo-people';
@@ -20,6 +20,7 @@ type SignInFields = z.infer<typeof schema>;
 export function SignInForm() {
   const back = safePath(useSearchParams()[0].get('back'));
   const facts = useQuery(serverFactsQuery());
+  const session = useQuery(sessionQuery());
   const queryClient = useQueryClient();
   const navigate = useNavigate();
   const [fault, setFault] = useState<string | null>(null);
@@ -42,6 +43,8 @@ export function SignInForm() {
     if (answer.code === 'EMAIL_NOT_VERIFIED') await navigate(withBack('/check-mail', back), { state: { to: email } });
     else setFault(answer.sentence);
   };
+  // who is signed in already has no business at the door
+  if (session.data === true && !isEntering) return <Navigate to={back} replace />;
   const { errors } = formState;
   const demo = facts.data?.demoAccounts ?? [];
   return (

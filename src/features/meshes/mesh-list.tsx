@@ -7,7 +7,8 @@ import { EmptyState, ErrorState, LoadingState } from '../../components/states';
 import { Head, SortHead, Table } from '../../components/table';
 import { Select } from '../../components/text-field';
 import { tell } from '../../lib/api-problem';
-import { displayFor, useMe } from '../../lib/me';
+import { countOf } from '../../lib/format';
+import { displayFor, useMe, useWords } from '../../lib/me';
 import { meshesQuery } from '../../lib/queries/meshes';
 import { MeshRow } from './mesh-row';
 import { UnitQuestion } from './unit-question';
@@ -23,6 +24,7 @@ export interface MeshListProps {
 /** The team's meshes; those that still wait for their unit come first. */
 export function MeshList({ teamId, mayChange }: MeshListProps) {
   const display: LengthDisplay = displayFor(useMe(), null, 'in');
+  const say = useWords();
   const [params, setParams] = useSearchParams();
   const search = params.get('search') ?? '';
   const sort = SORTS.find((each) => each === params.get('sort')) ?? 'created';
@@ -45,7 +47,9 @@ export function MeshList({ teamId, mayChange }: MeshListProps) {
     return (
       <EmptyState title="No mesh yet">
         {mayChange
-          ? 'Scan a fender liner, or ask the maker of your pedal box for an STL file. Boxes and cylinders need no file: they are made on the bench.'
+          ? say(
+              'Scan a fender liner, or ask the maker of your pedal box for an STL file. Boxes and cylinders need no file: they are made on the bench.',
+            )
           : 'A designer of the team brings them in.'}
       </EmptyState>
     );
@@ -87,6 +91,9 @@ export function MeshList({ teamId, mayChange }: MeshListProps) {
           }
         />
       )}
+      <p role="status" className="sr-only">
+        {meshes.isSuccess && countOf(listed.length, 'mesh', 'meshes')}
+      </p>
       {listed.length > 0 && (
         <Table
           label="Meshes of the team"

@@ -5,6 +5,7 @@ import { JobRack } from '../../components/job-card';
 import { ListBar } from '../../components/list-bar';
 import { EmptyState, ErrorState, LoadingState } from '../../components/states';
 import { tell } from '../../lib/api-problem';
+import { countOf } from '../../lib/format';
 import { projectsQuery } from '../../lib/queries/projects';
 import { useListQuery } from '../../lib/use-list-query';
 import { ProjectCard } from './project-card';
@@ -74,6 +75,9 @@ export function ProjectList({ teamId, empty, mayRestore }: ProjectListProps) {
           }
         />
       )}
+      <p role="status" className="sr-only">
+        {query.isSuccess && countOf(projects.length, 'project')}
+      </p>
       <JobRack label="Projects">
         {projects.map((project) => (
           <li key={project.id}>

@@ -8,6 +8,8 @@ import { NameDialog } from '../../components/name-dialog';
 import { Section } from '../../components/page-head';
 import { EmptyState, ErrorState, LoadingState } from '../../components/states';
 import { sayProblem, tell } from '../../lib/api-problem';
+import { countOf } from '../../lib/format';
+import { useWords } from '../../lib/me';
 import { scenesQuery } from '../../lib/queries/scenes';
 import { useListQuery } from '../../lib/use-list-query';
 import { FIRST_SCENE } from './facts-schema';
@@ -33,6 +35,7 @@ export function SceneList({ projectId, mayChange }: SceneListProps) {
   const { search, sort, state } = list;
   const scenes = useQuery(scenesQuery(projectId, { search, sort, state }));
   const navigate = useNavigate();
+  const say = useWords();
   const create = useCreateScene(projectId, (scene) => void navigate(`/scenes/${scene.id}`));
   const [isAsking, setAsking] = useState(false);
   const isNone = scenes.data?.length === 0;
@@ -72,7 +75,9 @@ export function SceneList({ projectId, mayChange }: SceneListProps) {
           }
         >
           {mayChange
-            ? 'A scene holds firewall, column, pedal box and all that crowds around them. Begin with what cannot move: wiper motor, fender liner, engine.'
+            ? say(
+                'A scene holds firewall, column, pedal box and all that crowds around them. Begin with what cannot move: wiper motor, fender liner, engine.',
+              )
             : 'Nobody has laid out a scene in this project so far.'}
           {create.isError && <p className="mt-2 font-semibold text-hits">{sayProblem(create.error)}</p>}
         </EmptyState>
@@ -88,6 +93,9 @@ export function SceneList({ projectId, mayChange }: SceneListProps) {
           }
         />
       )}
+      <p role="status" className="sr-only">
+        {scenes.isSuccess && countOf(scenes.data.length, 'scene')}
+      </p>
       <JobRack label="Scenes">
         {scenes.data?.map((scene) => (
           <li key={scene.id}>

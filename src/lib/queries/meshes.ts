@@ -1,6 +1,6 @@
 import { keepPreviousData, queryOptions } from '@tanstack/react-query';
 import type { z } from 'zod';
-import { listMeshes } from '#shared/api';
+import { listMeshes, listProjectMeshes } from '#shared/api';
 import { callApi } from '../api';
 
 type MeshListQuery = z.input<typeof listMeshes.query>;
@@ -10,4 +10,10 @@ export const meshesQuery = (teamId: string, query: MeshListQuery) =>
     queryKey: ['team', teamId, 'meshes', query],
     queryFn: ({ signal }) => callApi(listMeshes, { params: { teamId }, query, signal }),
     placeholderData: keepPreviousData,
+  });
+
+export const projectMeshesQuery = (projectId: string) =>
+  queryOptions({
+    queryKey: ['project', projectId, 'meshes'],
+    queryFn: ({ signal }) => callApi(listProjectMeshes, { params: { projectId }, signal }),
   });
