@@ -1,5 +1,7 @@
 // Lengths as people read them. A gap is rounded down and a need is rounded up, so that no figure ever looks clearer than
 // what it stands for.
+// A field that is typed into is printed without a locale: 5.375 in a language with a decimal comma would be `5,375`, which
+// parseLength refuses as it may mean five thousand. All other forms are read back to the printed step.
 import { MM_PER_INCH, type LengthDisplay } from './brands';
 
 export interface LengthParts {
@@ -17,7 +19,7 @@ export interface LengthParts {
 export type Rounding = 'nearest' | 'down' | 'up';
 
 export interface PrintOptions {
-  /** Finest fraction of an inch: 16 by default, 64 at most. */
+  /** Finest fraction of an inch: 16 by default (32 for gaps and needs), 64 at most. */
   readonly denominator?: 8 | 16 | 32 | 64;
   /** Decimals for `mm` (1) and `in-decimal` (3). */
   readonly decimals?: number;
@@ -112,11 +114,15 @@ export function formatNeed(mm: number, display: LengthDisplay, options: PrintOpt
 }
 
 /** An angle as text: `12.5°`. */
-export function formatAngle(degrees: number, options: { decimals?: number; locale?: string } = {}): string {
+export function formatAngle(
+  degrees: number,
+  options: { readonly decimals?: number; readonly locale?: string } = {},
+): string {
   return `${decimalParts(degrees, options.decimals ?? 1, { locale: options.locale }, 'mm').text}°`;
 }
 
-/** A share 0 to 1 as whole per cent: `62 %`. */
-export function formatPercent(share: number): string {
-  return `${Math.round(share * 100)} %`;
+/** A share 0 to 1 as whole per cent: `62 %`; with a locale as that language writes it. */
+export function formatPercent(share: number, options: { readonly locale?: string } = {}): string {
+  if (options.locale === undefined) return `${Math.round(share * 100)} %`;
+  return new Intl.NumberFormat(options.locale, { style: 'percent', maximumFractionDigits: 0 }).format(share);
 }
