@@ -2,7 +2,8 @@
 export * from './limits';
 export { loadScene, loadSceneText } from './load';
 export type { LoadResult } from './load';
-export { CURRENT_VERSION, migrate } from './migrations';
+export { CURRENT_VERSION, migrate, MIGRATIONS } from './migrations';
+export type { Migration } from './migrations';
 export { poseFromRigid, rigidOf, worldPose } from './pose';
 export type { Refusal } from './references';
 export { pathText, refusalsOf } from './refusals';

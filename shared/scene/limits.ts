@@ -14,3 +14,6 @@ export const MAX_REACH = 100_000;
 export const LEAST_ACCURACY = 0.0001;
 export const MAX_NAME = 120;
 export const MAX_NOTE = 2000;
+
+/** More faults than a person reads: the list of refusals ends here, per list of the document and in all. */
+export const MAX_REFUSALS = 100;

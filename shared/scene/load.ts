@@ -1,8 +1,8 @@
 // The only way from unknown data to a scene.
-import { MAX_DOCUMENT_BYTES } from './limits';
+import { MAX_DOCUMENT_BYTES, MAX_REFUSALS } from './limits';
 import { migrate } from './migrations';
 import { findBrokenReferences, type Refusal } from './references';
-import { refusalsOf } from './refusals';
+import { pathText, refusalsOf } from './refusals';
 import { sceneSchema } from './schema';
 import type { Scene } from './types';
 
@@ -16,18 +16,39 @@ const DEEPEST = 32;
 
 const refuse = (path: string, reason: string): LoadResult => ({ ok: false, refusals: [{ path, reason }] });
 
-function isTooDeep(value: unknown, left: number): boolean {
-  if (typeof value !== 'object' || value === null) return false;
-  if (left === 0) return true;
-  for (const inner of Object.values(value)) if (isTooDeep(inner, left - 1)) return true;
-  return false;
+/**
+ * What must not even reach the schema: nesting that no document has, and the one key that some code would take for an
+ * object's prototype. zod passes over that key in silence in places, and an unknown key is to be refused.
+ */
+function findHostile(value: unknown, path: readonly PropertyKey[]): Refusal | null {
+  if (typeof value !== 'object' || value === null) return null;
+  if (path.length > DEEPEST) return { path: '', reason: 'the document is nested too deeply' };
+  if (Array.isArray(value)) {
+    for (let i = 0; i < value.length; i += 1) {
+      const inner: unknown = value[i];
+      const found = typeof inner === 'object' ? findHostile(inner, [...path, i]) : null;
+      if (found !== null) return found;
+    }
+    return null;
+  }
+  for (const key of Object.keys(value)) {
+    if (key === '__proto__') return { path: pathText([...path, key]), reason: 'is not known' };
+    const inner = (value as Readonly<Record<string, unknown>>)[key];
+    const found = typeof inner === 'object' ? findHostile(inner, [...path, key]) : null;
+    if (found !== null) return found;
+  }
+  return null;
 }
 
-/** Checks and, if it is older, upgrades a document; fills in its defaults. Never throws. */
+/**
+ * Checks and, if it is older, upgrades a document; fills in its defaults. Never throws. The refusals stand in the
+ * document's order, those that one value shows alone before those between values, a hundred at most.
+ */
 export function loadScene(input: unknown): LoadResult {
   if (typeof input !== 'object' || input === null || Array.isArray(input))
     return refuse('', 'the document must be an object');
-  if (isTooDeep(input, DEEPEST)) return refuse('', 'the document is nested too deeply');
+  const hostile = findHostile(input, []);
+  if (hostile !== null) return refuse(hostile.path, hostile.reason);
   const raw = input as Readonly<Record<string, unknown>>;
   if (raw['format'] !== 'gapwright-scene') {
     return refuse('format', raw['format'] === undefined ? 'is missing' : 'must be "gapwright-scene"');
@@ -39,7 +60,7 @@ export function loadScene(input: unknown): LoadResult {
     const [first, ...rest] = refusalsOf(parsed.error, migrated.document);
     return { ok: false, refusals: [first ?? { path: '', reason: 'the document is not valid' }, ...rest] };
   }
-  const [first, ...rest] = findBrokenReferences(parsed.data);
+  const [first, ...rest] = findBrokenReferences(parsed.data).slice(0, MAX_REFUSALS);
   if (first !== undefined) return { ok: false, refusals: [first, ...rest] };
   return { ok: true, scene: parsed.data };
 }
@@ -72,13 +93,28 @@ function decodeUtf8(bytes: Uint8Array): string | null {
   return parts.join('');
 }
 
-/** Reads a document from the bytes of a JSON file (UTF-8, a byte order mark is passed over). Never throws. */
-export function loadSceneText(bytes: Uint8Array): LoadResult {
-  if (bytes.length === 0) return refuse('', 'the document is empty');
-  if (bytes.length > MAX_DOCUMENT_BYTES) {
-    return refuse('', `the document has ${bytes.length} bytes, more than the ${MAX_DOCUMENT_BYTES} allowed`);
+/** Length of a text in UTF-8, bytes. */
+function utf8Length(text: string): number {
+  let length = 0;
+  for (let i = 0; i < text.length; i += 1) {
+    const unit = text.charCodeAt(i);
+    // each half of a pair counts two, together the four bytes of its character
+    length += unit < 0x80 ? 1 : unit < 0x800 || (unit >= 0xd800 && unit < 0xe000) ? 2 : 3;
   }
-  const text = decodeUtf8(bytes);
+  return length;
+}
+
+/**
+ * Reads a document from a JSON file: its bytes (UTF-8) or its text. A byte order mark is passed over. Where an object
+ * names a key twice the last one counts, as in every JSON reader of this program. Never throws.
+ */
+export function loadSceneText(source: Uint8Array | string): LoadResult {
+  const size = typeof source === 'string' ? utf8Length(source) : source.length;
+  if (size === 0) return refuse('', 'the document is empty');
+  if (size > MAX_DOCUMENT_BYTES) {
+    return refuse('', `the document has ${size} bytes, more than the ${MAX_DOCUMENT_BYTES} allowed`);
+  }
+  const text = typeof source === 'string' ? source.replace(/^\ufeff/, '') : decodeUtf8(source);
   if (text === null) return refuse('', 'the document is not UTF-8 text');
   let value: unknown;
   try {

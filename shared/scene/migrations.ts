@@ -24,7 +24,10 @@ export function migrate(
   const { version } = document;
   if (version === undefined) return { ok: false, reason: 'is missing' };
   if (typeof version !== 'number' || !Number.isInteger(version) || version < 1) {
-    return { ok: false, reason: `must be a whole number from 1 to ${current}` };
+    return {
+      ok: false,
+      reason: current === 1 ? 'must be the number 1' : `must be a whole number from 1 to ${current}`,
+    };
   }
   if (version > current) {
     return { ok: false, reason: `${version} is newer than this program reads (${current}): use a newer one` };
@@ -34,7 +37,11 @@ export function migrate(
   for (let v = version; v < current; v += 1) {
     const step = migrations.get(v);
     if (step === undefined) return { ok: false, reason: `there is no way from version ${v} to ${v + 1}` };
-    upgraded = { ...step(upgraded), version: v + 1 };
+    try {
+      upgraded = { ...step(upgraded), version: v + 1 };
+    } catch {
+      return { ok: false, reason: `the document is not what version ${v} asks for: it cannot be brought to ${v + 1}` };
+    }
     ran.push(v);
   }
   return { ok: true, document: upgraded, ran };

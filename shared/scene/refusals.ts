@@ -1,5 +1,6 @@
 // zod's findings in the document's own words: the path of the offender and what it must be.
 import type { z } from 'zod';
+import { MAX_REFUSALS } from './limits';
 import type { Refusal } from './references';
 
 type Issue = z.core.$ZodIssue;
@@ -49,7 +50,9 @@ function reasonOf(issue: Issue, isMissing: boolean): string {
     case 'unrecognized_keys':
       return 'is not known';
     case 'invalid_union':
-      return 'must name one component, group or category';
+      return issue.path.at(-2) === 'between'
+        ? 'must name one component, group or category'
+        : 'must be a finite number, text, true or false';
     default:
       return issue.message;
   }
@@ -69,27 +72,51 @@ function valueAt(input: unknown, path: readonly PropertyKey[]): unknown {
 function kindRefusal(issue: Issue, input: unknown): Refusal | null {
   if (issue.code !== 'invalid_union' || !('discriminator' in issue) || typeof issue.discriminator !== 'string')
     return null;
-  const holder = valueAt(input, issue.path);
-  if (typeof holder !== 'object' || holder === null) return { path: pathText(issue.path), reason: 'must be an object' };
-  const at = issue.path.at(-1) === issue.discriminator ? issue.path : [...issue.path, issue.discriminator];
+  const isAtKind = issue.path.at(-1) === issue.discriminator;
+  const holder = isAtKind ? issue.path.slice(0, -1) : issue.path;
+  const value = valueAt(input, holder);
+  if (typeof value !== 'object' || value === null) {
+    const isMissing = value === undefined && typeof holder.at(-1) === 'string';
+    return { path: pathText(holder), reason: isMissing ? 'is missing' : 'must be an object' };
+  }
+  const at = [...holder, issue.discriminator];
   const known = String(at.at(-3)) === 'steps' ? ['swing', 'slide'] : ['box', 'cylinder', 'mesh'];
   const missing = valueAt(input, at) === undefined;
   return { path: pathText(at), reason: missing ? 'is missing' : `must be one of ${listed(known)}` };
 }
 
-/** All findings of zod as refusals; `input` is what was read. */
+/** The findings of the one branch of a union that the value was meant for; null if that is not clear. */
+function branchIssues(issue: Issue, input: unknown): Issue[] | null {
+  if (issue.code !== 'invalid_union') return null;
+  const fits = issue.errors.filter((branch) =>
+    branch.every(
+      ({ code, path }) =>
+        (code !== 'invalid_type' && code !== 'invalid_value') ||
+        (path.length > 0 && valueAt(input, [...issue.path, ...path]) !== undefined),
+    ),
+  );
+  const [branch, ...others] = fits;
+  if (branch === undefined || others.length > 0) return null;
+  return branch.map((inner) => ({ ...inner, path: [...issue.path, ...inner.path] }));
+}
+
+function refusalsOfIssue(issue: Issue, input: unknown): Refusal[] {
+  if (issue.code === 'unrecognized_keys') {
+    return issue.keys.map((key) => ({ path: pathText([...issue.path, key]), reason: 'is not known' }));
+  }
+  const kind = kindRefusal(issue, input);
+  if (kind !== null) return [kind];
+  const branch = branchIssues(issue, input);
+  if (branch !== null) return branch.flatMap((inner) => refusalsOfIssue(inner, input));
+  const isMissing =
+    issue.path.length > 0 &&
+    valueAt(input, issue.path) === undefined &&
+    typeof issue.path.at(-1) === 'string' &&
+    (issue.code === 'invalid_type' || issue.code === 'invalid_value' || issue.code === 'invalid_union');
+  return [{ path: pathText(issue.path), reason: reasonOf(issue, isMissing) }];
+}
+
+/** The findings of zod as refusals, the first hundred; `input` is what was read. */
 export function refusalsOf(error: z.core.$ZodError, input: unknown): Refusal[] {
-  return error.issues.flatMap((issue): Refusal[] => {
-    if (issue.code === 'unrecognized_keys') {
-      return issue.keys.map((key) => ({ path: pathText([...issue.path, key]), reason: 'is not known' }));
-    }
-    const kind = kindRefusal(issue, input);
-    if (kind !== null) return [kind];
-    const isMissing =
-      issue.path.length > 0 &&
-      valueAt(input, issue.path) === undefined &&
-      typeof issue.path.at(-1) === 'string' &&
-      (issue.code === 'invalid_type' || issue.code === 'invalid_value' || issue.code === 'invalid_union');
-    return [{ path: pathText(issue.path), reason: reasonOf(issue, isMissing) }];
-  });
+  return error.issues.flatMap((issue) => refusalsOfIssue(issue, input)).slice(0, MAX_REFUSALS);
 }

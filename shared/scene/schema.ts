@@ -1,22 +1,40 @@
 // The shape of a scene document, version 1. What one value can say about itself is here; what needs two values to see
 // (duplicates, dangling ids, sums) is in references.ts.
 import { z } from 'zod';
-import { LEAST_ACCURACY, MAX_COMPONENTS, MAX_MOTIONS, MAX_NAME, MAX_NOTE, MAX_REACH, MAX_STEPS } from './limits';
+import { listOf, recordOf } from './bounded';
+import {
+  LEAST_ACCURACY,
+  MAX_COMPONENTS,
+  MAX_MOTIONS,
+  MAX_NAME,
+  MAX_NOTE,
+  MAX_REACH,
+  MAX_SOLIDS,
+  MAX_STEPS,
+} from './limits';
 import { CATEGORIES, SOURCES, type Scene } from './types';
 
 const finite = z.number();
 const above0 = finite.gt(0);
 const notBelow0 = finite.gte(0);
 const withinReach = finite.gte(-MAX_REACH).lte(MAX_REACH);
-const point = z.tuple([withinReach, withinReach, withinReach]);
+/** A place: 100 m from the origin at most, in a straight line. */
+const point = z
+  .tuple([withinReach, withinReach, withinReach])
+  .refine(([x, y, z]) => x * x + y * y + z * z <= MAX_REACH * MAX_REACH, {
+    error: 'must lie within 100 m of the origin',
+  });
 const triple = z.tuple([finite, finite, finite]);
 const direction = triple.refine((v) => v.some((x) => x !== 0), { error: 'must not be zero' });
 
 const ID = /^[a-z0-9-]{1,64}$/;
 const id = z.string().regex(ID, { error: 'must be 1 to 64 of a-z, 0-9 and -' });
-/** Characters as people count them, not UTF-16 units. */
+/** Characters as people count them, not UTF-16 units; none that no database stores. */
 const characters = (least: number, most: number, what: string) =>
-  z.string().refine((s) => [...s].length >= least && [...s].length <= most, { error: what });
+  z
+    .string()
+    .refine((s) => s.length <= 2 * most && s.length >= least && [...s].length <= most, { error: what })
+    .refine((s) => !/\0|\p{Surrogate}/u.test(s), { error: 'must not hold NUL or half a character' });
 const name = characters(1, MAX_NAME, `must have 1 to ${MAX_NAME} characters`);
 
 const pose = z.strictObject({ at: point.optional(), turn: triple.optional() });
@@ -24,17 +42,24 @@ const pose = z.strictObject({ at: point.optional(), turn: triple.optional() });
 const box = z.strictObject({ kind: z.literal('box'), size: z.tuple([above0, above0, above0]) });
 const cylinder = z.strictObject({ kind: z.literal('cylinder'), diameter: above0, length: above0 });
 
-/** Why a mesh's path is refused, or null. A path stays inside the document's folder and has one spelling everywhere. */
+/**
+ * Why a mesh's path is refused, or null. It is relative and stays inside the document's folder on every system; a SHA-256
+ * is such a path too. `a/../b.stl` does not leave the folder and is taken.
+ */
 export function meshPathFault(path: string): string | null {
   if (path === '') return 'must not be empty';
   if (path.length > 1024) return 'must have at most 1024 characters';
-  if (/\p{Cc}/u.test(path)) return 'must not hold control characters';
-  if (path.startsWith('/') || path.startsWith('\\') || /^[a-z]:/i.test(path)) return 'must not be an absolute path';
+  if (/\p{Cc}|\p{Surrogate}/u.test(path)) return 'must not hold control characters';
+  if (/^[/\\]|^[a-z]:/i.test(path)) return 'must not be an absolute path';
   if (/^[a-z][a-z0-9+.-]*:/i.test(path)) return 'must be a path, not an address';
-  const parts = path.split(/[/\\]/);
-  if (parts.includes('..')) return "must not leave the document's folder";
+  let depth = 0;
+  for (const part of path.split(/[/\\]/)) {
+    if (part === '..') depth -= 1;
+    else if (part !== '.' && part !== '') depth += 1;
+    if (depth < 0) return "must not leave the document's folder";
+  }
   if (path.includes('\\')) return 'must be written with / between folders';
-  if (parts.some((p) => p === '' || p === '.')) return 'must be a plain path to a file';
+  if (/(^|\/)\.{0,2}$/.test(path)) return 'must name a file';
   return null;
 }
 
@@ -47,6 +72,8 @@ const shape = z.discriminatedUnion('kind', [box, cylinder, mesh]);
 
 const solid = z.strictObject({ id, name: name.optional(), shape, pose: pose.optional() });
 
+// `from` belongs to the first step. A later one may say 0, as a document written out with its defaults does; any other value
+// is refused in references.ts.
 const swing = z.strictObject({
   kind: z.literal('swing'),
   point,
@@ -61,15 +88,19 @@ const motion = z.strictObject({
   id,
   name,
   use: z.enum(['operating', 'service']),
-  solids: z.array(id).min(1).optional(),
+  solids: z.array(id).min(1).max(MAX_SOLIDS).optional(),
   steps: z.array(step).min(1).max(MAX_STEPS),
 });
 
 const hole = z.strictObject({ id, at: point, axis: direction, diameter: above0 });
 
+/** What a recipe was given. The check has no use for it, so it is held to what a recipe could ever ask for. */
 const recipe = z.strictObject({
-  kind: id,
-  params: z.record(z.string().max(64), z.union([finite, z.string().max(200), z.boolean()])),
+  kind: name,
+  params: recordOf(
+    (key) => key.length <= 64 && key !== '__proto__',
+    z.union([finite, characters(0, 200, 'must have at most 200 characters'), z.boolean()]),
+  ),
 });
 
 const component = z.strictObject({
@@ -82,9 +113,9 @@ const component = z.strictObject({
   source: z.enum(SOURCES).optional(),
   note: characters(0, MAX_NOTE, `must have at most ${MAX_NOTE} characters`).optional(),
   recipe: recipe.optional(),
-  solids: z.array(solid).min(1),
+  solids: z.array(solid).min(1).max(MAX_SOLIDS),
   motions: z.array(motion).max(MAX_MOTIONS).default([]),
-  holes: z.array(hole).default([]),
+  holes: listOf(hole).default([]),
 });
 
 const side = z.union([
@@ -103,7 +134,7 @@ const rules = z.strictObject({
   gap: notBelow0.default(6),
   movingGap: notBelow0.default(10),
   touch: finite.gte(LEAST_ACCURACY).default(0.01),
-  pairs: z.array(pair).default([]),
+  pairs: listOf(pair).default([]),
 });
 
 const laser = z.strictObject({ id, name, point, normal: direction });
@@ -115,9 +146,9 @@ export const sceneSchema = z.strictObject({
   version: z.literal(1),
   name,
   display: z.enum(['mm', 'in', 'in-decimal']).default('mm'),
-  lasers: z.array(laser).default([]),
-  groups: z.array(group).default([]),
-  components: z.array(component).max(MAX_COMPONENTS),
+  lasers: listOf(laser).default([]),
+  groups: listOf(group).default([]),
+  components: z.array(z.unknown()).max(MAX_COMPONENTS).pipe(listOf(component)),
   rules: rules.prefault({}),
   accuracy: finite.gte(LEAST_ACCURACY).default(0.05),
 }) satisfies z.ZodType<Scene>;
