@@ -2,6 +2,7 @@ import { AlertDialog } from 'radix-ui';
 import { useState, type ReactNode } from 'react';
 import { Button } from './button';
 import { TextField } from './text-field';
+import { useOpener } from './use-opener';
 
 export interface ConfirmDialogProps {
   readonly open: boolean;
@@ -21,11 +22,12 @@ export interface ConfirmDialogProps {
 }
 
 export function ConfirmDialog({ open, onOpenChange, title, children, ...rest }: ConfirmDialogProps) {
+  const giveBack = useOpener(open);
   return (
     <AlertDialog.Root open={open} onOpenChange={onOpenChange}>
       <AlertDialog.Portal>
         <AlertDialog.Overlay className="scrim">
-          <AlertDialog.Content className="on-card cut sheet">
+          <AlertDialog.Content className="on-card cut sheet" onCloseAutoFocus={giveBack}>
             <AlertDialog.Title className="mb-2 pr-6 text-xl font-extrabold">{title}</AlertDialog.Title>
             <AlertDialog.Description asChild>
               <div className="grid gap-2">{children}</div>

@@ -4,6 +4,7 @@ import type { ReactNode } from 'react';
 import { classes } from './classes';
 import { Hole } from './hole';
 import { CrossMark } from './pictograms';
+import { useOpener } from './use-opener';
 
 export interface DialogProps {
   readonly open: boolean;
@@ -16,11 +17,13 @@ export interface DialogProps {
 }
 
 export function Dialog({ open, onOpenChange, title, lead, wide = false, children }: DialogProps) {
+  const giveBack = useOpener(open);
   return (
     <Radix.Root open={open} onOpenChange={onOpenChange}>
       <Radix.Portal>
         <Radix.Overlay className="scrim">
           <Radix.Content
+            onCloseAutoFocus={giveBack}
             className={classes('on-card cut sheet', wide && 'sheet-wide')}
             {...(lead === undefined ? { 'aria-describedby': undefined } : {})}
           >

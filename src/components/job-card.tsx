@@ -34,7 +34,7 @@ export function JobCard({ title, to, picture, pictureAlt, children, figures, men
         </Heading>
         <div className="mt-0.5 grid gap-0.5">{children}</div>
       </div>
-      <div className="job-figures perforated flex min-w-52 items-start justify-between gap-3 py-3.5 pr-3 pl-5">
+      <div className="job-figures perforated flex items-start justify-between gap-3 py-3.5 pr-3 pl-5">
         <div className="grid gap-1 text-sm">{figures}</div>
         {menu !== undefined && <div className="job-above -mt-1.5">{menu}</div>}
       </div>

@@ -9,8 +9,11 @@ function isWorthRetrying(error: unknown): boolean {
 
 export function createQueryClient(onMutationError: (error: unknown) => void): QueryClient {
   /** A session that has ended is seen by whatever asks next; asking for the person again lets the guard send to the door. */
-  const watchSession = (error: unknown): void => {
-    if (isProblem(error, 'session/missing')) void client.invalidateQueries({ queryKey: ['me'] });
+  const watchSession = (error: unknown, isAboutMe: boolean): void => {
+    if (!isProblem(error, 'session/missing')) return;
+    // the door lets everybody through who is said to be signed in
+    client.setQueryData(['session'], false);
+    if (!isAboutMe) void client.invalidateQueries({ queryKey: ['me'] });
   };
   const client: QueryClient = new QueryClient({
     defaultOptions: {
@@ -24,13 +27,11 @@ export function createQueryClient(onMutationError: (error: unknown) => void): Qu
       mutations: { retry: false, networkMode: 'always' },
     },
     queryCache: new QueryCache({
-      onError: (error, query) => {
-        if (query.queryKey[0] !== 'me') watchSession(error);
-      },
+      onError: (error, query) => watchSession(error, query.queryKey[0] === 'me'),
     }),
     mutationCache: new MutationCache({
       onError: (error, _variables, _context, mutation) => {
-        watchSession(error);
+        watchSession(error, false);
         // a form shows its problem itself
         if (mutation.meta?.['shownInPlace'] !== true) onMutationError(error);
       },
