@@ -50,6 +50,7 @@ export function AngleField({
           type="text"
           autoComplete="off"
           spellCheck={false}
+          data-drafting={draft.isEditing || undefined}
           disabled={disabled}
           className={classes('input figures', look === 'measure' && 'input-measure')}
           value={draft.text}

@@ -4,7 +4,7 @@ import type { ReactNode } from 'react';
 import { classes } from './classes';
 import { Hole } from './hole';
 import { CrossMark } from './pictograms';
-import { useOpener } from './use-opener';
+import { leaveToField, useOpener } from './use-opener';
 
 export interface DialogProps {
   readonly open: boolean;
@@ -24,6 +24,7 @@ export function Dialog({ open, onOpenChange, title, lead, wide = false, children
         <Radix.Overlay className="scrim">
           <Radix.Content
             onCloseAutoFocus={giveBack}
+            onEscapeKeyDown={leaveToField}
             className={classes('on-card cut sheet', wide && 'sheet-wide')}
             {...(lead === undefined ? { 'aria-describedby': undefined } : {})}
           >

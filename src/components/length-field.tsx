@@ -81,6 +81,7 @@ export function LengthField({
             inputMode="text"
             autoComplete="off"
             spellCheck={false}
+            data-drafting={draft.isEditing || undefined}
             disabled={disabled}
             placeholder={value === null ? LENGTH_EXAMPLE : undefined}
             className={classes('input figures', look === 'measure' && 'input-measure', isSet && '!text-transparent')}

@@ -21,3 +21,8 @@ export function useOpener(open: boolean): (event: Event) => void {
     if (opening.by?.isConnected === true) opening.by.focus();
   };
 }
+
+/** For a dialog: Esc in a field that is being typed in belongs to the field, which takes back what was typed. */
+export function leaveToField(event: Event): void {
+  if (event.target instanceof Element && event.target.matches('[data-drafting]')) event.preventDefault();
+}

@@ -5,7 +5,7 @@ import { classes } from './classes';
 export const ZoneDrawing = ({ className }: { readonly className?: string }) => (
   <svg
     viewBox="0 0 480 520"
-    preserveAspectRatio="xMidYMax slice"
+    preserveAspectRatio="xMidYMid slice"
     className={classes('scribed block bg-dye', className)}
     fill="none"
     stroke="var(--scribe-soft)"
