@@ -1,18 +1,20 @@
 // The built product on a fresh database, for the browser tests: `node e2e/serve.mjs PORT`.
-import { spawn } from 'node:child_process';
+import { spawn, spawnSync } from 'node:child_process';
 import fs from 'node:fs';
 import os from 'node:os';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
 import pg from 'pg';
-import { runDatabaseCommand } from '../server/setup/db.mjs';
-import { startPostgres } from '../server/setup/postgres.mjs';
 
 const ROOT = fileURLToPath(new URL('..', import.meta.url));
 const NAME = 'gapwright_browser';
 const port = process.argv[2];
 
-const server = process.env.TEST_DATABASE_URL ?? (await startPostgres('test', { quiet: true })).url;
+const server = process.env.TEST_DATABASE_URL;
+if (!server) {
+  console.error('TEST_DATABASE_URL is missing: run the browser tests with `npm test`, or name a PostgreSQL in it.');
+  process.exit(1);
+}
 const admin = new pg.Client({ connectionString: server });
 await admin.connect();
 await admin.query(`drop database if exists ${NAME} with (force)`);
@@ -34,10 +36,13 @@ const env = {
   TRUST_PROXY: 'loopback',
   LOG_LEVEL: 'error',
 };
-runDatabaseCommand('migrate', env.DATABASE_URL, env);
-runDatabaseCommand('seed', env.DATABASE_URL, env);
+const compiled = (name) => path.join(ROOT, 'dist/server', `${name}.js`);
+for (const step of ['migrate', 'seed']) {
+  const { status } = spawnSync(process.execPath, [compiled(step)], { cwd: ROOT, stdio: 'inherit', env });
+  if (status !== 0) process.exit(1);
+}
 
-const child = spawn(process.execPath, [path.join(ROOT, 'dist/server/main.js')], { cwd: ROOT, stdio: 'inherit', env });
+const child = spawn(process.execPath, [compiled('main')], { cwd: ROOT, stdio: 'inherit', env });
 const clear = () => fs.rmSync(files, { recursive: true, force: true });
 for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, () => child.kill('SIGTERM'));
 child.on('exit', (code) => {
