@@ -33,9 +33,15 @@ export function listOf<T extends z.ZodType>(record: T) {
   });
 }
 
+// zod's own objects and records pass over a key __proto__ in silence
+const anObject = z.custom<Readonly<Record<string, unknown>>>(
+  (value) => typeof value === 'object' && value !== null && !Array.isArray(value),
+  { error: 'must be an object' },
+);
+
 /** An object whose keys and values are all of one kind, in full or refused. */
 export function recordOf<T extends z.ZodType>(isKey: (key: string) => boolean, record: T) {
-  return z.looseObject({}).transform((values, context): Record<string, z.output<T>> => {
+  return anObject.transform((values, context): Record<string, z.output<T>> => {
     const entries: [string, z.output<T>][] = [];
     for (const [key, value] of Object.entries(values)) {
       if (isKey(key)) {

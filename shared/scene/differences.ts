@@ -1,7 +1,5 @@
 // The difference of two documents, record by record: what autosave sends, what undo turns round, what is replayed on a newer
 // document. A record is the head, the rules' head, one laser, group, component or pair rule, or the order of a list.
-import { z } from 'zod';
-import { headSchema, recordSchemas, ruleHeadSchema } from './schema';
 import type { PairRule, Scene, Side } from './types';
 
 /** One record before and after; null where it is not there. */
@@ -9,10 +7,10 @@ export interface RecordChange<T> {
   readonly before: T | null;
   readonly after: T | null;
 }
-type Changes<T> = Readonly<Record<string, RecordChange<T>>>;
+export type Changes<T> = Readonly<Record<string, RecordChange<T>>>;
 
-type Head = Pick<Scene, 'name' | 'display' | 'accuracy'>;
-type RuleHead = Pick<Scene['rules'], 'gap' | 'movingGap' | 'touch'>;
+export type Head = Pick<Scene, 'name' | 'display' | 'accuracy'>;
+export type RuleHead = Pick<Scene['rules'], 'gap' | 'movingGap' | 'touch'>;
 export const LISTS = ['lasers', 'groups', 'components', 'pairs'] as const;
 export type ListName = (typeof LISTS)[number];
 
@@ -52,12 +50,13 @@ function pairKeys(pairs: readonly PairRule[]): string[] {
   });
 }
 
-interface KeyedList {
+export interface KeyedList {
   readonly keys: readonly string[];
   readonly byKey: ReadonlyMap<string, unknown>;
 }
 
-function keyedList(scene: Scene, list: ListName): KeyedList {
+/** The records of one list under their keys. */
+export function keyedList(scene: Scene, list: ListName): KeyedList {
   const records: readonly unknown[] = list === 'pairs' ? scene.rules.pairs : scene[list];
   const keys = list === 'pairs' ? pairKeys(scene.rules.pairs) : scene[list].map((r) => r.id);
   return { keys, byKey: new Map(keys.map((key, i) => [key, records[i]])) };
@@ -71,20 +70,22 @@ export function sameValue(a: unknown, b: unknown): boolean {
   const keysOf = (o: object): string[] => Object.keys(o).filter((k) => (o as Record<string, unknown>)[k] !== undefined);
   const keys = keysOf(a);
   if (keys.length !== keysOf(b).length) return false;
-  return keys.every((k) => sameValue((a as Record<string, unknown>)[k], (b as Record<string, unknown>)[k]));
+  return keys.every(
+    (k) => Object.hasOwn(b, k) && sameValue((a as Record<string, unknown>)[k], (b as Record<string, unknown>)[k]),
+  );
 }
 
-const headOf = ({ name, display, accuracy }: Scene): Head => ({ name, display, accuracy });
-const ruleHeadOf = ({ rules: { gap, movingGap, touch } }: Scene): RuleHead => ({ gap, movingGap, touch });
+export const headOf = ({ name, display, accuracy }: Scene): Head => ({ name, display, accuracy });
+export const ruleHeadOf = ({ rules: { gap, movingGap, touch } }: Scene): RuleHead => ({ gap, movingGap, touch });
 
 function listChanges(before: KeyedList, after: KeyedList): Record<string, RecordChange<unknown>> | undefined {
-  const changes: Record<string, RecordChange<unknown>> = {};
+  const changes: [string, RecordChange<unknown>][] = [];
   for (const key of new Set([...before.keys, ...after.keys])) {
     const a = before.byKey.get(key);
     const b = after.byKey.get(key);
-    if (a !== b && !sameValue(a, b)) changes[key] = { before: a ?? null, after: b ?? null };
+    if (a !== b && !sameValue(a, b)) changes.push([key, { before: a ?? null, after: b ?? null }]);
   }
-  return Object.keys(changes).length === 0 ? undefined : changes;
+  return changes.length === 0 ? undefined : Object.fromEntries(changes);
 }
 
 /** What turns `before` into `after`. */
@@ -115,91 +116,27 @@ export function invertDifference(d: Difference): Difference {
   const turnedAll = (values: object): unknown =>
     Object.fromEntries(Object.entries(values).map(([key, value]) => [key, turned(value)]));
   return Object.fromEntries(
-    Object.entries(d).map(([part, value]) => [
-      part,
-      part === 'head' || part === 'ruleHead' ? turned(value) : turnedAll(value as object),
-    ]),
+    Object.entries(d)
+      .filter(([, value]) => value !== undefined)
+      .map(([part, value]) => [
+        part,
+        part === 'head' || part === 'ruleHead' ? turned(value) : turnedAll(value as object),
+      ]),
   );
 }
 
 export function isEmptyDifference(d: Difference): boolean {
-  return Object.keys(d).length === 0;
+  return Object.values(d).every((part) => part === undefined || Object.keys(part as object).length === 0);
 }
 
-export type ApplyResult =
-  | { readonly ok: true; readonly scene: Scene }
-  /** Records that stand otherwise than the difference expects, as a person would name them. */
-  | { readonly ok: false; readonly conflicts: readonly string[] };
-
-/** Field by field where a head allows it: two people may change name and accuracy at once. */
-function mergeHead<T extends object>(now: T, change: RecordChange<T>): T | null {
-  const { before, after } = change;
-  if (before === null || after === null) return null;
-  const merged = { ...now };
-  for (const key of Object.keys(after) as (keyof T)[]) {
-    if (sameValue(before[key], after[key])) continue;
-    if (!sameValue(now[key], before[key]) && !sameValue(now[key], after[key])) return null;
-    merged[key] = after[key];
-  }
-  return merged;
-}
-
-/** Puts records in the order that `after` wants, keeping those that it does not know next to their neighbours. */
-function ordered(present: readonly string[], wanted: readonly string[]): string[] {
-  const there = new Set(present);
-  const result = wanted.filter((key) => there.has(key));
-  const placed = new Set(result);
-  for (const [i, key] of present.entries()) {
-    if (placed.has(key)) continue;
-    const neighbour = present.slice(0, i).findLast((k) => placed.has(k));
-    result.splice(neighbour === undefined ? 0 : result.indexOf(neighbour) + 1, 0, key);
-    placed.add(key);
-  }
-  return result;
-}
-
-function applyList(scene: Scene, list: ListName, d: Difference, conflicts: string[]): unknown[] {
-  const now = keyedList(scene, list);
-  const records = new Map(now.byKey);
-  const keys = [...now.keys];
-  for (const [key, change] of Object.entries((d[list] ?? {}) as Changes<unknown>)) {
-    const current = records.get(key) ?? null;
-    if (sameValue(current, change.after)) continue;
-    if (!sameValue(current, change.before)) {
-      conflicts.push(`${list}: ${key}`);
-      continue;
-    }
-    if (change.after === null) records.delete(key);
-    else {
-      if (!records.has(key)) keys.push(key);
-      records.set(key, change.after);
-    }
-  }
-  const present = keys.filter((key) => records.has(key));
-  const wanted = d.order?.[list]?.after;
-  return (wanted === undefined ? present : ordered(present, wanted)).map((key) => records.get(key));
-}
-
-/** Applies a difference to a document that may have moved on. Nothing is applied if any record is in conflict. */
-export function applyDifference(scene: Scene, d: Difference): ApplyResult {
-  const conflicts: string[] = [];
-  const head = d.head === undefined ? headOf(scene) : mergeHead(headOf(scene), d.head);
-  if (head === null) conflicts.push('name, unit and accuracy');
-  const ruleHead = d.ruleHead === undefined ? ruleHeadOf(scene) : mergeHead(ruleHeadOf(scene), d.ruleHead);
-  if (ruleHead === null) conflicts.push('general gaps');
-  const [lasers, groups, components, pairs] = LISTS.map((list) => applyList(scene, list, d, conflicts));
-  if (conflicts.length > 0 || head === null || ruleHead === null) return { ok: false, conflicts };
-  const lists = { lasers, groups, components } as Pick<Scene, 'lasers' | 'groups' | 'components'>;
-  return {
-    ok: true,
-    scene: { ...scene, ...head, ...lists, rules: { ...ruleHead, pairs: pairs as PairRule[] } },
-  };
-}
-
-/** Components that a difference changes, or whose group or rules it changes. */
+/**
+ * Components whose findings a difference may change: those it changes, and those whose group, category or general rules it
+ * changes. `scene` is the document after it.
+ */
 export function touchedComponents(d: Difference, scene: Scene): Set<string> {
   const touched = new Set(Object.keys(d.components ?? {}));
-  const all = d.ruleHead !== undefined || d.head !== undefined;
+  // the name and the unit of a scene decide nothing
+  const all = d.ruleHead !== undefined || d.head?.before?.accuracy !== d.head?.after?.accuracy;
   const groups = new Set(Object.keys(d.groups ?? {}));
   const categories = new Set<string>();
   for (const change of Object.values(d.pairs ?? {})) {
@@ -214,24 +151,3 @@ export function touchedComponents(d: Difference, scene: Scene): Set<string> {
   }
   return touched;
 }
-
-const key = z.string().min(1).max(400);
-const changeOf = <T extends z.ZodType>(record: T) =>
-  z.strictObject({ before: record.nullable(), after: record.nullable() });
-const changesOf = <T extends z.ZodType>(record: T) => z.record(key, changeOf(record));
-const keys = z.array(key).max(10_000);
-
-/** A difference as it comes over the wire. */
-export const differenceSchema = z.strictObject({
-  head: changeOf(headSchema).optional(),
-  ruleHead: changeOf(ruleHeadSchema).optional(),
-  lasers: changesOf(recordSchemas.laser).optional(),
-  groups: changesOf(recordSchemas.group).optional(),
-  components: changesOf(recordSchemas.component).optional(),
-  pairs: changesOf(recordSchemas.pair).optional(),
-  order: z
-    .strictObject(
-      Object.fromEntries(LISTS.map((list) => [list, z.strictObject({ before: keys, after: keys }).optional()])),
-    )
-    .optional(),
-}) as unknown as z.ZodType<Difference>;

@@ -34,7 +34,8 @@ export type {
   SwingStep,
   Vec3,
 } from './types';
-export { canonicalSceneText } from './canonical';
+export { canonicalSceneText, sceneForExport } from './canonical';
+export { fixedSolids, movedSolids, operatingMotions, serviceMotions } from './motions';
 export {
   DEFAULT_GAPS,
   DEFAULT_GENERAL,
@@ -45,15 +46,15 @@ export {
   ruleOrigin,
 } from './defaults';
 export type { DefaultGap } from './defaults';
-export {
-  applyDifference,
-  differenceSchema,
-  diffScenes,
-  invertDifference,
-  isEmptyDifference,
-  pairKey,
-  sameValue,
-  touchedComponents,
-} from './differences';
-export type { ApplyResult, Difference } from './differences';
-export * from './edits';
+export { applyDifference } from './apply-difference';
+export type { ApplyResult } from './apply-difference';
+export { differenceSchema } from './difference-schema';
+export { diffScenes, invertDifference, isEmptyDifference, pairKey, sameValue, touchedComponents } from './differences';
+export type { Difference } from './differences';
+export * from './edit-components';
+export * from './edit-groups';
+export * from './edit-lasers';
+export * from './edit-rules';
+export * from './edit-solids';
+export { edits } from './named-edits';
+export type { NamedEdit } from './named-edits';

@@ -112,7 +112,10 @@ function refusalsOfIssue(issue: Issue, input: unknown): Refusal[] {
     issue.path.length > 0 &&
     valueAt(input, issue.path) === undefined &&
     typeof issue.path.at(-1) === 'string' &&
-    (issue.code === 'invalid_type' || issue.code === 'invalid_value' || issue.code === 'invalid_union');
+    (issue.code === 'invalid_type' ||
+      issue.code === 'invalid_value' ||
+      issue.code === 'invalid_union' ||
+      issue.code === 'custom');
   return [{ path: pathText(issue.path), reason: reasonOf(issue, isMissing) }];
 }
 

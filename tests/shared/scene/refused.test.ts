@@ -134,6 +134,7 @@ const CASES: readonly (readonly [path: string, value: unknown, reason: string, a
   ['components[0].pose', [0, 0, 0], 'must be an object'],
   ['components[0].solids[0].shape', 'box', 'must be an object'],
   ['components[0].recipe.params', [], 'must be an object'],
+  ['components[0].recipe.params', undefined, 'is missing'],
   ['components[0].recipe.params.arm', [240], 'must be a finite number, text, true or false'],
   ['components[0].recipe.params.arm', 'x'.repeat(201), 'must have at most 200 characters'],
 
