@@ -10,9 +10,25 @@ export default defineConfig({
   // `npm run dev`: pages come from here, the API from the server beside it
   server: { proxy: { '/api': `http://127.0.0.1:${process.env['PORT'] ?? '4180'}` } },
   test: {
-    include: ['tests/**/*.test.ts', 'tests/**/*.test.tsx'],
-    exclude: ['tests/bench/**', 'node_modules/**'],
     testTimeout: 30_000,
     hookTimeout: 60_000,
+    projects: [
+      {
+        extends: true,
+        test: {
+          name: 'server',
+          include: ['tests/server/**/*.test.ts'],
+          globalSetup: 'tests/server/global-setup.ts',
+        },
+      },
+      {
+        extends: true,
+        test: {
+          name: 'pure',
+          include: ['tests/**/*.test.ts', 'tests/**/*.test.tsx'],
+          exclude: ['tests/server/**', 'tests/bench/**', 'node_modules/**'],
+        },
+      },
+    ],
   },
 });

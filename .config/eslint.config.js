@@ -39,6 +39,7 @@ export default tseslint.config(
         clearInterval: 'readonly',
         Buffer: 'readonly',
         fetch: 'readonly',
+        AbortController: 'readonly',
         AbortSignal: 'readonly',
         performance: 'readonly',
       },

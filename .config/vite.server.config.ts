@@ -4,6 +4,7 @@ import { defineConfig } from 'vite';
 
 const ENTRIES = {
   main: 'server/main.ts',
+  settings: 'server/cli/settings.ts',
   migrate: 'server/db/migrate.ts',
   seed: 'server/db/seed.ts',
   'dry-fit-worker': 'server/dry-fits/worker.ts',

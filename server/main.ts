@@ -79,17 +79,18 @@ async function main(): Promise<void> {
     mailer.close();
     await database.close();
   };
-  for (const signal of ['SIGINT', 'SIGTERM'] as const) {
-    process.on(signal, () => {
-      end().then(
-        () => process.exit(0),
-        (error: unknown) => {
-          log.error({ err: error }, 'the server did not end cleanly');
-          process.exit(1);
-        },
-      );
-    });
-  }
+  const stop = (): void => {
+    end().then(
+      () => process.exit(0),
+      (error: unknown) => {
+        log.error({ err: error }, 'the server did not end cleanly');
+        process.exit(1);
+      },
+    );
+  };
+  for (const signal of ['SIGINT', 'SIGTERM'] as const) process.on(signal, stop);
+  // `npm start` was killed: it would have stopped this server
+  process.on('disconnect', stop);
   try {
     await listen(server, config.port, config.host);
   } catch (error) {

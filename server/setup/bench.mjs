@@ -5,9 +5,9 @@ import { checkNode, ensureNpmPackages } from './packages.mjs';
 import { ROOT } from './places.mjs';
 import { fail, runOrFail } from './say.mjs';
 
-await runOrFail('the benchmarks are run', () => {
+await runOrFail('the benchmarks are run', async () => {
   checkNode();
-  ensureNpmPackages();
+  await ensureNpmPackages();
   const args = ['--expose-gc', '--import', 'tsx', path.join(ROOT, 'tests/bench/run.ts'), ...process.argv.slice(2)];
   const result = spawnSync(process.execPath, args, { cwd: ROOT, stdio: 'inherit' });
   if (result.status !== 0) fail('A benchmark failed; the lines above say why.');

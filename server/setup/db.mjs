@@ -1,57 +1,60 @@
-// `npm run db:*`: the project's own PostgreSQL by hand.
-import { spawnSync } from 'node:child_process';
-import path from 'node:path';
+// `npm run db:*`: the database by hand.
 import { ensureBuilt } from './build.mjs';
+import { checkSettings, migrate, seedDemo } from './commands.mjs';
 import { checkNode, ensureNpmPackages } from './packages.mjs';
-import { ROOT } from './places.mjs';
-import { startPostgres, stopPostgres } from './postgres.mjs';
+import { releasePostgres, startPostgres, stopPostgres } from './postgres.mjs';
 import { fail, runOrFail, say } from './say.mjs';
+import { loadEnvFile, outsideDatabase, serverEnv } from './settings.mjs';
 
-/** Runs a compiled database command against a server that is up. */
-export function runDatabaseCommand(name, url, extraEnv = {}) {
-  const file = path.join(ROOT, 'dist/server', `${name}.js`);
-  const result = spawnSync(process.execPath, [file], {
-    cwd: ROOT,
-    stdio: ['ignore', 'inherit', 'inherit'],
-    env: { ...process.env, DATABASE_URL: url, ...extraEnv },
-  });
-  if (result.status !== 0)
-    fail(`The database step "${name}" failed; the lines above say why. Nothing half-done was kept.`);
+/** Starts our own server unless the settings name another, and leaves it running: its address is of no use otherwise. */
+async function address() {
+  return outsideDatabase() ?? (await startPostgres('main', { quiet: true, note: 'npm run db:url', keep: true })).url;
+}
+
+/** Does something with the database, and leaves our own server as it was found. */
+async function withDatabase(work) {
+  await ensureNpmPackages();
+  await ensureBuilt('server');
+  const outside = outsideDatabase();
+  const url = outside ?? (await startPostgres('main', { note: 'npm run db' })).url;
+  try {
+    await work(serverEnv(url));
+  } finally {
+    if (outside === null) await releasePostgres('main');
+  }
 }
 
 const COMMANDS = {
   async url() {
-    console.log((await startPostgres('main', { quiet: true })).url);
+    console.log(await address());
   },
-  async migrate() {
-    const { url } = await startPostgres('main');
-    ensureBuilt('server');
-    runDatabaseCommand('migrate', url);
+  async start() {
+    await address();
+    say('PostgreSQL runs. npm run db:url tells its address, npm run db:stop stops it.');
   },
-  async seed() {
-    const { url, base } = await startPostgres('main');
-    ensureBuilt('server');
-    runDatabaseCommand('migrate', url);
-    runDatabaseCommand('seed', url, { GAPWRIGHT_FILES: process.env.GAPWRIGHT_FILES ?? path.join(base, 'files') });
-  },
+  migrate: () => withDatabase(migrate),
+  seed: () =>
+    withDatabase(async (env) => {
+      await checkSettings(env);
+      await migrate(env);
+      await seedDemo(env);
+    }),
   async reset() {
-    if (!process.argv.includes('--yes'))
-      fail('This drops all data of this checkout. Run it again as: npm run db:reset -- --yes');
-    const { url } = await startPostgres('main');
-    ensureBuilt('server');
-    runDatabaseCommand('migrate', url, { GAPWRIGHT_RESET: 'yes' });
+    if (!process.argv.includes('--yes')) {
+      fail('This drops all data in the database. If that is meant, run: npm run db:reset -- --yes');
+    }
+    await withDatabase((env) => migrate({ ...env, GAPWRIGHT_RESET: 'yes' }));
   },
-  stop() {
-    say(stopPostgres('main') ? 'PostgreSQL stopped.' : 'PostgreSQL was not running.');
+  async stop() {
+    if (outsideDatabase() !== null) fail('DATABASE_URL names a database that is not ours to stop.');
+    say((await stopPostgres('main')) ? 'PostgreSQL stopped.' : 'PostgreSQL was not running.');
   },
 };
 
-if (process.argv[1]?.endsWith('db.mjs')) {
-  await runOrFail('the database is set up', async () => {
-    checkNode();
-    ensureNpmPackages();
-    const command = COMMANDS[process.argv[2]];
-    if (command === undefined) fail(`Unknown: ${process.argv[2]}. There are ${Object.keys(COMMANDS).join(', ')}.`);
-    await command();
-  });
-}
+await runOrFail('the database is set up', async () => {
+  checkNode();
+  loadEnvFile();
+  const name = process.argv[2] ?? '';
+  if (!Object.hasOwn(COMMANDS, name)) fail(`Unknown: "${name}". There are ${Object.keys(COMMANDS).join(', ')}.`);
+  await COMMANDS[name]();
+});

@@ -1,74 +1,72 @@
 // `npm start`: from a bare machine to the running product, and in seconds when all is there.
 import { spawn } from 'node:child_process';
-import net from 'node:net';
-import path from 'node:path';
 import { ensureAllBuilt } from './build.mjs';
-import { runDatabaseCommand } from './db.mjs';
+import { checkSettings, compiled, migrate, seedDemo } from './commands.mjs';
 import { checkNode, ensureNpmPackages } from './packages.mjs';
-import { ROOT } from './places.mjs';
-import { startPostgres, stopPostgres } from './postgres.mjs';
-import { fail, runOrFail, say } from './say.mjs';
-import { loadEnvFile } from './env-file.mjs';
+import { dataFolder, ROOT } from './places.mjs';
+import { refuseTakenPort } from './port.mjs';
+import { releasePostgres, startPostgres } from './postgres.mjs';
+import { heedSignals, stopIfAsked } from './run.mjs';
+import { runOrFail, say } from './say.mjs';
+import { DEFAULT_HOST, DEFAULT_PORT, loadEnvFile, outsideDatabase, serverEnv } from './settings.mjs';
 
-const portIsFree = (port, host) =>
-  new Promise((resolve) => {
-    const server = net.createServer();
-    server.once('error', () => resolve(false));
-    server.listen(port, host, () => server.close(() => resolve(true)));
-  });
+/** A second Ctrl-C counts only after this: npm and the terminal both pass the first one on. */
+const IMPATIENT_AFTER_MS = 1000;
 
-/** Runs the server until it ends; signals go on to it, so that it can drain. */
+/** Runs the server until it ends; a signal goes on to it, so that it can drain. Gives its exit code. */
 function runServer(env) {
   return new Promise((resolve) => {
-    const child = spawn(process.execPath, [path.join(ROOT, 'dist/server/main.js')], {
+    const child = spawn(process.execPath, [compiled('main')], {
       cwd: ROOT,
-      stdio: ['ignore', 'inherit', 'inherit'],
+      // the server ends by itself when this process is gone: the fourth one tells it
+      stdio: ['ignore', 'inherit', 'inherit', 'ipc'],
+      // a group of its own: the terminal's Ctrl-C comes through us alone
+      detached: true,
       env,
     });
-    let asked = 0;
-    const forward = (signal) => {
-      asked += 1;
-      // a terminal's Ctrl-C reaches the child by itself as well; a second one means now
-      child.kill(asked > 1 ? 'SIGKILL' : signal);
+    let askedAt = 0;
+    const forward = () => {
+      if (askedAt === 0) {
+        askedAt = Date.now();
+        child.kill('SIGTERM');
+      } else if (Date.now() - askedAt > IMPATIENT_AFTER_MS) child.kill('SIGKILL');
     };
-    process.on('SIGINT', () => forward('SIGTERM'));
-    process.on('SIGTERM', () => forward('SIGTERM'));
-    child.on('exit', (code, signal) => resolve(asked > 0 ? 0 : (code ?? (signal ? 1 : 0))));
+    process.on('SIGINT', forward);
+    process.on('SIGTERM', forward);
+    process.on('SIGHUP', forward);
+    child.once('exit', (code) => resolve(askedAt > 0 ? 0 : (code ?? 1)));
   });
+}
+
+async function bringUp(env, isLocal) {
+  await migrate(env);
+  if (isLocal) await seedDemo(env);
+  stopIfAsked();
+  return runServer(env);
 }
 
 await runOrFail('the product is brought up', async () => {
   checkNode();
+  heedSignals();
   loadEnvFile();
-  const port = Number(process.env.PORT || 4180);
-  const host = process.env.HOST || '127.0.0.1';
-  if (!(await portIsFree(port, host))) {
-    fail(
-      `Port ${port} on ${host} is taken by another program, or may not be used. Stop that program, or set PORT to another one.`,
-    );
-  }
-  ensureNpmPackages();
-  const outside = process.env.DATABASE_URL;
-  const postgres = outside ? null : await startPostgres('main');
-  const stop = () => {
-    if (postgres?.startedHere) stopPostgres('main');
-  };
+  const host = process.env.HOST || DEFAULT_HOST;
+  const port = process.env.PORT || String(DEFAULT_PORT);
+  await refuseTakenPort(host, port, dataFolder('main'));
+  await ensureNpmPackages();
+  await ensureAllBuilt();
+  const outside = outsideDatabase();
+  await checkSettings(serverEnv(outside ?? 'postgres://ours'));
+  const isLocal = process.env.GAPWRIGHT_MODE !== 'production';
   let code;
-  try {
-    ensureAllBuilt();
-    const env = {
-      ...process.env,
-      DATABASE_URL: outside ?? postgres.url,
-      GAPWRIGHT_FILES: process.env.GAPWRIGHT_FILES ?? path.join(postgres?.base ?? ROOT, 'files'),
-      PORT: String(port),
-      HOST: host,
-    };
-    runDatabaseCommand('migrate', env.DATABASE_URL, env);
-    if (env.GAPWRIGHT_MODE !== 'production') runDatabaseCommand('seed', env.DATABASE_URL, env);
-    code = await runServer(env);
-  } finally {
-    stop();
+  if (outside !== null) code = await bringUp(serverEnv(outside), isLocal);
+  else {
+    try {
+      const { url } = await startPostgres('main', { note: `npm start at http://${host}:${port}` });
+      code = await bringUp(serverEnv(url), isLocal);
+    } finally {
+      await releasePostgres('main');
+    }
   }
-  say('Stopped.');
+  if (code === 0) say('Stopped.');
   process.exit(code);
 });

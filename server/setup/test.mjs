@@ -1,124 +1,126 @@
-// `npm test`: every check there is, each step named; the last line counts them.
-import { spawnSync } from 'node:child_process';
+// `npm test`: every check there is, each step named; the last line counts them. A step that fails does not keep the others
+// from running: one run tells all that is wrong.
 import fs from 'node:fs';
 import os from 'node:os';
 import path from 'node:path';
 import { ensureAllBuilt } from './build.mjs';
-import { checkNode, ensureChromium, ensureNpmPackages } from './packages.mjs';
+import { ensureChromium } from './debian.mjs';
+import { checkNode, ensureNpmPackages } from './packages.mjs';
 import { ROOT } from './places.mjs';
-import { startPostgres, stopPostgres } from './postgres.mjs';
+import { releasePostgres, startPostgres } from './postgres.mjs';
+import { heedSignals, run, stopIfAsked } from './run.mjs';
 import { runOrFail, say, sentenceOf } from './say.mjs';
+import { playwrightCounts, vitestCounts } from './test-counts.mjs';
+
+/** @typedef {import('./test-counts.mjs').Counts} Counts */
+
+const PASSED = { passed: 1, failed: 0 };
+const FAILED = { passed: 0, failed: 1 };
 
 const bin = (name) => path.join(ROOT, 'node_modules/.bin', name);
-const scratch = fs.mkdtempSync(path.join(os.tmpdir(), 'gapwright-test-'));
+const readJson = (file) => {
+  try {
+    return JSON.parse(fs.readFileSync(file, 'utf8'));
+  } catch {
+    return null;
+  }
+};
 
-function run(command, args, env = {}) {
-  const result = spawnSync(command, args, {
-    cwd: ROOT,
-    stdio: ['ignore', 'inherit', 'inherit'],
-    env: { ...process.env, ...env },
-  });
-  return result.status === 0;
+/** Settings of this machine have no say in the tests. */
+const SETTINGS =
+  /^(GAPWRIGHT_(?!DATA$|PG_BIN$|PG_PORT$)|DATABASE_|S3_|SMTP_|MAIL_FROM$|BASE_URL$|PORT$|HOST$|TRUST_PROXY$|NODE_ENV$)/;
+const testEnv = (extra) => ({
+  ...Object.fromEntries(Object.entries(process.env).filter(([name]) => !SETTINGS.test(name))),
+  ...extra,
+});
+
+async function succeeds(command, args, env = {}) {
+  const { status } = await run(bin(command), args, { cwd: ROOT, env: testEnv(env), show: true });
+  return status === 0;
 }
 
 /** A step that either passes or fails as one. */
-const whole = (command, args) => () => (run(bin(command), args) ? { passed: 1, failed: 0 } : { passed: 0, failed: 1 });
+const whole = (command, args) => async () => ((await succeeds(command, args)) ? PASSED : FAILED);
 
-/** Vitest's or Playwright's own counts; a run that ended without a report is one failure. */
-function counted(file, read, ok) {
-  try {
-    const counts = read(JSON.parse(fs.readFileSync(file, 'utf8')));
-    return ok || counts.failed > 0 ? counts : { ...counts, failed: 1 };
-  } catch {
-    return { passed: 0, failed: 1 };
-  }
-}
-
-const vitest = (name, args) => (env) => {
+const vitest = (name, args) => async (env, scratch) => {
   const file = path.join(scratch, `${name}.json`);
-  const ok = run(
-    bin('vitest'),
-    ['run', '--reporter=default', '--reporter=json', `--outputFile.json=${file}`, ...args],
-    env,
-  );
-  return counted(
-    file,
-    (r) => ({
-      passed: r.numPassedTests,
-      failed: r.numFailedTests + (r.numFailedTestSuites > 0 && r.numFailedTests === 0 ? 1 : 0),
-    }),
-    ok,
-  );
+  const all = ['run', '--reporter=default', '--reporter=json', `--outputFile.json=${file}`, ...args];
+  const ok = await succeeds('vitest', all, env);
+  return vitestCounts(readJson(file), ok);
 };
 
-function playwright(env) {
-  const file = path.join(scratch, 'browser.json');
-  const args = ['test', '--config', 'e2e/playwright.config.ts', '--reporter=list,json'];
-  const ok = run(bin('playwright'), args, { ...env, PLAYWRIGHT_JSON_OUTPUT_NAME: file });
-  return counted(file, ({ stats }) => ({ passed: stats.expected, failed: stats.unexpected + stats.flaky }), ok);
+async function types() {
+  let isSound = true;
+  // the browser's code, the shared code that knows neither browser nor Node, and this folder
+  for (const project of ['.', 'shared', 'server/setup']) {
+    isSound = (await succeeds('tsc', ['--noEmit', '-p', project])) && isSound;
+  }
+  return isSound ? PASSED : FAILED;
 }
 
-function build() {
+async function build() {
   try {
-    ensureAllBuilt();
-    return { passed: 1, failed: 0 };
+    await ensureAllBuilt();
+    return PASSED;
   } catch (error) {
     say(sentenceOf(error, 'the product is built'));
-    return { passed: 0, failed: 1 };
+    return FAILED;
   }
 }
 
+async function playwright(env, scratch) {
+  const file = path.join(scratch, 'browser.json');
+  const args = ['test', '--config', 'e2e/playwright.config.ts', '--reporter=list,json'];
+  const ok = await succeeds('playwright', args, { ...env, PLAYWRIGHT_JSON_OUTPUT_NAME: file });
+  return playwrightCounts(readJson(file), ok);
+}
+
+/** @type {[string, (env: Record<string, string>, scratch: string) => Promise<Counts>][]} */
 const STEPS = [
   ['format', whole('prettier', ['--check', '--log-level', 'warn', '.'])],
   ['lint', whole('eslint', ['--config', '.config/eslint.config.js', '.'])],
-  [
-    'types',
-    () =>
-      run(bin('tsc'), ['--noEmit']) && run(bin('tsc'), ['--noEmit', '-p', 'shared/tsconfig.json'])
-        ? { passed: 1, failed: 0 }
-        : { passed: 0, failed: 1 },
-  ],
+  ['types', types],
   ['architecture', vitest('architecture', ['tests/architecture.test.ts'])],
   ['build', build],
   ['vitest', vitest('vitest', ['--exclude', 'tests/architecture.test.ts'])],
   ['playwright', playwright],
 ];
 
+/** Runs the steps; gives the sums and the names of the steps that failed. */
+async function runSteps(steps, env, scratch) {
+  const sums = { passed: 0, failed: 0 };
+  const failedSteps = [];
+  for (const [name, step] of steps) {
+    stopIfAsked();
+    say(`\n── ${name} ──`);
+    const begun = Date.now();
+    const { passed, failed } = await step(env, scratch);
+    sums.passed += passed;
+    sums.failed += failed;
+    if (failed > 0) failedSteps.push(name);
+    const seconds = ((Date.now() - begun) / 1000).toFixed(1);
+    say(`── ${name}: ${passed} passed, ${failed} failed, ${seconds} s`);
+  }
+  return { ...sums, failedSteps };
+}
+
 await runOrFail('the tests are brought up', async () => {
   checkNode();
-  ensureNpmPackages();
-  ensureChromium();
-  const postgres = await startPostgres('test');
-  const stop = () => {
-    if (postgres.startedHere) stopPostgres('test');
-    fs.rmSync(scratch, { recursive: true, force: true });
-  };
-  for (const signal of ['SIGINT', 'SIGTERM']) {
-    process.on(signal, () => {
-      stop();
-      process.exit(130);
-    });
-  }
+  heedSignals();
   const only = process.argv.slice(2);
-  let passed = 0;
-  let failed = 0;
-  const failedSteps = [];
+  const steps = STEPS.filter(([name]) => only.length === 0 || only.includes(name));
+  await ensureNpmPackages();
+  await ensureChromium();
+  const scratch = fs.mkdtempSync(path.join(os.tmpdir(), 'gapwright-test-'));
+  let result;
   try {
-    for (const [name, step] of STEPS) {
-      if (only.length > 0 && !only.includes(name)) continue;
-      say(`\n── ${name} ──`);
-      const begun = Date.now();
-      const counts = step({ TEST_DATABASE_URL: postgres.url });
-      passed += counts.passed;
-      failed += counts.failed;
-      if (counts.failed > 0) failedSteps.push(name);
-      say(
-        `── ${name}: ${counts.passed} passed, ${counts.failed} failed, ${((Date.now() - begun) / 1000).toFixed(1)} s`,
-      );
-    }
+    const { url } = await startPostgres('test', { note: 'npm test' });
+    result = await runSteps(steps, { TEST_DATABASE_URL: url }, scratch);
   } finally {
-    stop();
+    await releasePostgres('test');
+    fs.rmSync(scratch, { recursive: true, force: true });
   }
+  const { passed, failed, failedSteps } = result;
   if (failedSteps.length > 0) console.log(`Failed in: ${failedSteps.join(', ')}`);
   console.log(`${passed} passed, ${failed} failed`);
   process.exit(failed > 0 ? 1 : 0);
