@@ -12,6 +12,7 @@ import { pictureRoutes } from './pictures/routes';
 import { projectRoutes } from './projects/routes';
 import { sceneRoutes } from './scenes/routes';
 import { shareRoutes } from './shares/routes';
+import { shareTags } from './shares/tags';
 import { teamRoutes } from './teams/routes';
 
 /** Faults that Express and its parsers make themselves, by their type. */
@@ -84,7 +85,9 @@ export function createApp(services: Services, options: { readonly clientFolder?:
     throw new ApiError('thing/missing');
   });
   app.use('/api', api);
-  if (options.clientFolder !== undefined) servePages(app, services, options.clientFolder);
+  if (options.clientFolder !== undefined) {
+    servePages(app, options.clientFolder, (token) => shareTags(services, token));
+  }
 
   const onError: ErrorRequestHandler = (error: unknown, req, res, next) => {
     if (res.headersSent) return next(error);

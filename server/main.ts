@@ -15,7 +15,7 @@ import { createLimits } from './http/limits';
 import { jobs, startJobs } from './jobs/jobs';
 import { sweep } from './jobs/sweep';
 import { createMailer } from './mail/mailer';
-import { sweepIncoming } from './meshes/upload';
+import { sweepIncoming } from './http/upload';
 import { createFileStore } from './storage/file-store';
 
 /** Requests that are under way get this long. */

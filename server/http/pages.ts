@@ -2,12 +2,11 @@
 import { existsSync, readFileSync } from 'node:fs';
 import path from 'node:path';
 import express, { type Express, type Request, type Response } from 'express';
-import { shareTags } from '../shares/tags';
-import type { Services } from './services';
 
 const MARK = '<!--share-tags-->';
 
-export function servePages(app: Express, services: Services, clientFolder: string): void {
+/** `tagsOf` gives the tags that a share link's preview is made of. */
+export function servePages(app: Express, clientFolder: string, tagsOf: (token: string) => Promise<string>): void {
   const indexFile = path.join(clientFolder, 'index.html');
   if (!existsSync(indexFile)) return;
   const page = readFileSync(indexFile, 'utf8');
@@ -23,7 +22,7 @@ export function servePages(app: Express, services: Services, clientFolder: strin
     res.send(page.replace(MARK, () => tags));
   };
   app.get('/s/:token', (req: Request<{ token: string }>, res, next) => {
-    shareTags(services, req.params.token).then((tags) => send(res, tags), next);
+    tagsOf(req.params.token).then((tags) => send(res, tags), next);
   });
   app.get('/{*rest}', (_req, res) => send(res, ''));
 }

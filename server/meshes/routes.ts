@@ -18,7 +18,7 @@ import { mount, SENT } from '../http/mount';
 import { sendBytes, sendFile } from '../http/send-file';
 import type { Services } from '../http/services';
 import { displayKey, displayMesh, guessUnit, judgeFile, listMeshLines, meshesOfProject, meshKey } from './rules';
-import { incomingOf, readUpload, type Incoming } from './upload';
+import { incomingOf, readUpload, type Incoming } from '../http/upload';
 
 const { mesh, project, revision, scene } = tables;
 

@@ -9,7 +9,7 @@ import { ApiError } from '../http/api-error';
 import { mount, SENT } from '../http/mount';
 import { sendFile } from '../http/send-file';
 import type { Services } from '../http/services';
-import { incomingOf, readUpload } from '../meshes/upload';
+import { incomingOf, readUpload } from '../http/upload';
 import { pngSize } from './png';
 
 const { picture } = tables;

@@ -1,4 +1,4 @@
-// Taking a mesh in: streamed to disk with its size watched, then read by a thread. Whatever goes wrong leaves nothing behind.
+// Taking a file in: streamed to disk with its size watched. Whatever goes wrong leaves nothing behind.
 import { randomUUID } from 'node:crypto';
 import { createWriteStream } from 'node:fs';
 import { mkdir, readdir, rm } from 'node:fs/promises';
@@ -6,7 +6,7 @@ import path from 'node:path';
 import { pipeline } from 'node:stream/promises';
 import type { Request, RequestHandler } from 'express';
 import multer, { MulterError, type StorageEngine } from 'multer';
-import { ApiError } from '../http/api-error';
+import { ApiError } from './api-error';
 
 export interface Incoming {
   /** Where the bytes lie. */
