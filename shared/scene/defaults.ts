@@ -29,7 +29,7 @@ export function isBodyPanel(category: Category): boolean {
 export interface DefaultGap {
   readonly between: readonly [Category, Category];
   readonly gap: number;
-  /** Where the figure comes from, for the person who has to stand by it. */
+  /** Where the figure comes from and why, for the person who has to stand by it; the document has no field for it. */
   readonly origin: string;
 }
 
@@ -37,32 +37,55 @@ const PRACTICE = 'common practice, no source';
 
 /** General gaps of a new scene, mm. */
 export const DEFAULT_GENERAL = {
-  gap: { value: 6, origin: `${PRACTICE}: two fixed parts, room for a finger and for paint` },
-  movingGap: { value: 12, origin: `${PRACTICE}: a moving part to anything, a finger's width` },
+  gap: { value: 10, origin: `${PRACTICE}: two fixed parts, or a hose or harness past metal` },
+  movingGap: { value: 13, origin: `${PRACTICE}: a moving part to anything, a finger's width; 20 is better` },
 } as const;
+
+function rows(gap: number, reason: string, one: Category, others: readonly Category[]): DefaultGap[] {
+  return others.map((other) => ({ between: [one, other], gap, origin: `${PRACTICE}: ${reason}` }));
+}
 
 /** The table of gaps by kind of part that a new scene begins with. */
 export const DEFAULT_GAPS: readonly DefaultGap[] = [
-  { between: ['pedal', 'pedal'], gap: 25, origin: `${PRACTICE}: arms apart, so that a shoe meets one pedal only` },
-  { between: ['pedal', 'column'], gap: 12, origin: `${PRACTICE}: arm to column or shaft over the whole sweep` },
-  { between: ['wiper', 'cowl'], gap: 8, origin: `${PRACTICE}: crank and link to anything` },
-  { between: ['wiper', 'bracket'], gap: 8, origin: `${PRACTICE}: crank and link to anything` },
-  { between: ['engine', 'firewall'], gap: 15, origin: `${PRACTICE}: engine to any fixed part, it rocks` },
-  { between: ['engine', 'master-cylinder'], gap: 15, origin: `${PRACTICE}: engine to any fixed part, it rocks` },
-  { between: ['engine', 'column'], gap: 15, origin: `${PRACTICE}: engine to any fixed part, it rocks` },
-  { between: ['engine', 'inner-fender'], gap: 15, origin: `${PRACTICE}: engine to any fixed part, it rocks` },
-  { between: ['engine', 'reservoir'], gap: 15, origin: `${PRACTICE}: engine to any fixed part, it rocks` },
-  { between: ['hood', 'engine'], gap: 19, origin: `${PRACTICE}: hood shut over an engine that lifts` },
-  { between: ['hood', 'master-cylinder'], gap: 12, origin: `${PRACTICE}: hood shut, with its pad` },
-  { between: ['hood', 'reservoir'], gap: 12, origin: `${PRACTICE}: hood shut, with its pad` },
-  { between: ['exhaust', 'line'], gap: 76, origin: `${PRACTICE}: brake or fuel line to exhaust, 3 in` },
-  { between: ['exhaust', 'hose'], gap: 76, origin: `${PRACTICE}: brake or fuel line to exhaust, 3 in` },
-  { between: ['exhaust', 'master-cylinder'], gap: 75, origin: `${PRACTICE}: cylinder to header, with a shield` },
-  { between: ['exhaust', 'wiring'], gap: 75, origin: `${PRACTICE}: bare wiring to exhaust` },
-  { between: ['belt', 'wiring'], gap: 25, origin: `${PRACTICE}: wiring to belt or pulley` },
-  { between: ['belt', 'hose'], gap: 25, origin: `${PRACTICE}: hose to belt or pulley` },
-  { between: ['driver', 'dash'], gap: 40, origin: `${PRACTICE}: knee and shin to dash` },
-  { between: ['driver', 'column'], gap: 40, origin: `${PRACTICE}: knee and shin to column drop` },
+  ...rows(25, 'pads apart, so that a shoe meets one pedal only; 50 between brake and clutch', 'pedal', [
+    'pedal',
+    'throttle',
+  ]),
+  ...rows(12, 'arm to column or shaft over the whole sweep; 20 is better', 'pedal', ['column']),
+  ...rows(25, 'room for the side of a shoe; 40 is better', 'throttle', ['tunnel']),
+  ...rows(8, 'crank and link to anything; 12 is better', 'wiper', [
+    'cowl',
+    'firewall',
+    'dash',
+    'heater',
+    'bracket',
+    'column',
+    'pedal-box',
+  ]),
+  ...rows(15, 'engine to any fixed part, as it rocks on its mounts; 25 is better', 'engine', [
+    'firewall',
+    'cowl',
+    'inner-fender',
+    'fender-liner',
+    'column',
+    'pedal-box',
+    'master-cylinder',
+    'reservoir',
+    'booster',
+    'bracket',
+  ]),
+  ...rows(19, 'hood shut over what stands highest; 25 and the lift of the engine are better', 'hood', [
+    'engine',
+    'belt',
+    'master-cylinder',
+    'reservoir',
+    'booster',
+  ]),
+  ...rows(76, 'brake or fuel line to exhaust, 3 in; nearer only behind a shield', 'exhaust', ['line', 'hose']),
+  ...rows(75, 'fluid to a header with a shield; 125 without one', 'exhaust', ['master-cylinder', 'reservoir']),
+  ...rows(75, 'bare wiring to exhaust; 40 with sleeve and shield', 'exhaust', ['wiring']),
+  ...rows(25, 'to belt or pulley, belts stretch and whip; 40 on the slack side', 'belt', ['wiring', 'hose', 'line']),
+  ...rows(40, 'knee and shin, with the pedal at rest and pressed; 50 is better', 'driver', ['dash', 'column']),
 ];
 
 const ruleOf = (row: DefaultGap): PairRule => ({
