@@ -1,0 +1,66 @@
+// "What would change it": the move in the shop's directions, tried on the bench before it is made.
+import { useEffect, useState } from 'react';
+import type { Finding } from '#shared/check';
+import { formatNeed } from '#shared/units';
+import { Button } from '../../../components/button';
+import { useBench, useFacts, useOpen } from '../bench-model';
+import { labelOf, shift } from '../edits';
+import { nameOf } from '../finding-words';
+import { freeingOf, movedBy } from './freeing';
+
+export function WhatWouldChangeIt({ finding }: { readonly finding: Finding }) {
+  const { open } = useBench();
+  const { display } = useFacts();
+  const scene = useOpen((o) => o.scene);
+  const canEdit = useOpen((o) => o.canEdit);
+  const [isTrying, setTrying] = useState(false);
+  const { setPreview } = open.getState();
+  useEffect(() => () => setPreview(null), [setPreview]);
+  const freeing = freeingOf(scene, finding);
+  if (freeing === null) return null;
+  const moved = movedBy(scene, freeing);
+  const group = scene.groups.find((g) => g.id === moved.group);
+  const way = freeing.moves.map((m) => `${formatNeed(m.distance, display)} ${m.direction}`).join(' and ');
+  const name = nameOf(scene, freeing.part);
+  const edit = { label: labelOf('Move', scene, moved), edit: (s: typeof scene) => shift(s, moved, freeing.vector) };
+  return (
+    <section className="freeing" aria-label="What would change it">
+      <p>
+        {freeing.verified ? (
+          <>
+            <b>{name}</b> <b>{way}</b> frees this pair.
+          </>
+        ) : (
+          <>
+            Straight apart, <b>{name}</b> would have to go <b>{way}</b>.
+          </>
+        )}
+        {group !== undefined && <> It takes its group along, {group.name}.</>}
+      </p>
+      {canEdit && (
+        <div className="freeing-deeds">
+          <Button
+            size="small"
+            aria-pressed={isTrying}
+            onClick={() => {
+              setPreview(isTrying ? null : edit.edit);
+              setTrying(!isTrying);
+            }}
+          >
+            {isTrying ? 'Put it back' : 'Try it'}
+          </Button>
+          <Button
+            size="small"
+            kind="main"
+            onClick={() => {
+              setTrying(false);
+              open.getState().apply(edit);
+            }}
+          >
+            Move it there
+          </Button>
+        </div>
+      )}
+    </section>
+  );
+}

@@ -1,0 +1,134 @@
+// Inside the canvas: draws the stage when something has changed, and only then.
+import { useFrame, useThree } from '@react-three/fiber';
+import { useEffect, useLayoutEffect, useMemo, useRef } from 'react';
+import { useBench, useFacts } from '../bench-model';
+import { viewFrom, zoneOf } from '../standpoints/standpoints';
+import { cameraHand } from './camera-hand';
+import { useInsets } from './insets';
+import { usePointer } from './use-pointer';
+import { createStageReader } from './read-stage';
+import { createRig, type Rig } from './rig';
+import { createStage, type Stage } from './stage';
+import type { Scene, WebGLRenderer } from 'three';
+import type { FreeArea } from './view';
+import { isCalm } from './webgl';
+
+export interface Running {
+  readonly stage: Stage;
+  readonly rig: Rig;
+  /** Brings the stage in step with the stores and draws. */
+  readonly refresh: () => void;
+}
+
+export function StageView() {
+  const bench = useBench();
+  const { display } = useFacts();
+  const insets = useInsets();
+  const gl = useThree((s) => s.gl);
+  const scene = useThree((s) => s.scene);
+  const size = useThree((s) => s.size);
+  const invalidate = useThree((s) => s.invalidate);
+  const running = useRef<Running | null>(null);
+  const area = useMemo<FreeArea>(
+    () => ({ width: size.width, height: size.height, ...insets }),
+    [size.width, size.height, insets],
+  );
+  const now = useRef({ display, area });
+
+  useLayoutEffect(() => {
+    now.current = { display, area };
+    running.current?.rig.resize(area);
+    running.current?.refresh();
+  }, [display, area]);
+
+  useEffect(() => {
+    const { open, live, session, meshes, view } = bench;
+    const read = createStageReader(bench);
+    const stage = createStage(meshes);
+    const zone = () => zoneOf(open.getState().scene, meshes);
+    let isTaken = false;
+    const rig = createRig(
+      {
+        element: gl.domElement,
+        calm: isCalm,
+        onMove: invalidate,
+        onTaken: () => {
+          isTaken = true;
+          session.getState().set({ standpoint: null });
+        },
+      },
+      viewFrom(session.getState().standpoint ?? 'bay', zone(), now.current.area),
+      now.current.area,
+    );
+    if (session.getState().standpoint === null) session.getState().set({ standpoint: 'bay' });
+    scene.add(stage.root);
+    const refresh = (): void => {
+      stage.update(read(now.current.display));
+      invalidate();
+    };
+    const onMeshes = (): void => {
+      refresh();
+      // until a hand takes the camera, it makes room for what comes in
+      const { standpoint } = session.getState();
+      if (!isTaken && standpoint !== null) rig.go(viewFrom(standpoint, zone(), now.current.area), true);
+    };
+    running.current = { stage, rig, refresh };
+    const detach = view.attach(
+      cameraHand({
+        rig,
+        stage,
+        gl,
+        scene,
+        bench,
+        read,
+        area: () => now.current.area,
+        facts: () => now.current,
+        refresh,
+      }),
+    );
+    const stops = [
+      open.subscribe(refresh),
+      session.subscribe(refresh),
+      live.subscribe(refresh),
+      meshes.subscribe(onMeshes),
+    ];
+    refresh();
+    return () => {
+      for (const stop of stops) stop();
+      detach();
+      running.current = null;
+      stage.root.removeFromParent();
+      stage.dispose();
+      rig.dispose();
+    };
+  }, [bench, gl, scene, invalidate]);
+
+  usePointer(gl.domElement, running);
+
+  useFrame(() => {
+    const run = running.current;
+    if (run === null) return;
+    if (run.rig.step(performance.now())) invalidate();
+    drawStage(run, gl, scene);
+    bench.frames.set(run.rig.frame());
+  }, 1);
+  return null;
+}
+
+/** Also sets what the materials need to know of the screen. */
+export function drawStage({ stage, rig }: Pick<Running, 'stage' | 'rig'>, gl: WebGLRenderer, scene: Scene): void {
+  const { light } = stage;
+  gl.getDrawingBufferSize(light.screen.value);
+  light.density.value = gl.getPixelRatio();
+  setRecede(stage, rig);
+  gl.render(scene, rig.camera());
+}
+
+/** What lies farther than the target recedes a little into the dye. */
+export function setRecede({ light }: Stage, rig: Rig): void {
+  const { target, span, isSquare } = rig.view();
+  const eye = rig.frame().eye;
+  const distance = Math.hypot(eye[0] - target[0], eye[1] - target[1], eye[2] - target[2]);
+  if (isSquare) light.recede.value.set(1e6, 2e6);
+  else light.recede.value.set(distance, distance + Math.max(span * 1.6, 900));
+}

@@ -1,0 +1,39 @@
+// The scene, full-bleed, with the marks that lie over it.
+import { Canvas } from '@react-three/fiber';
+import { Component, type ReactNode } from 'react';
+import { Overlay } from '../overlay/overlay';
+import { StageView } from './stage-view';
+
+export interface ViewportProps {
+  /** Edges without steps cost time; small pictures and tests do without. */
+  readonly antialias?: boolean;
+  readonly children?: ReactNode;
+}
+
+export function Viewport({ antialias = true, children }: ViewportProps) {
+  return (
+    <div className="bench-viewport">
+      <Canvas frameloop="demand" flat dpr={[1, 2]} gl={{ antialias, powerPreference: 'high-performance' }}>
+        <StageView />
+      </Canvas>
+      <Overlay />
+      {children}
+    </div>
+  );
+}
+
+interface BoundaryProps {
+  readonly fallback: ReactNode;
+  readonly children: ReactNode;
+}
+
+/** Drawing may fail where the rest works: the rest stays. */
+export class ViewportBoundary extends Component<BoundaryProps, { readonly failed: boolean }> {
+  override state = { failed: false };
+  static getDerivedStateFromError(): { readonly failed: boolean } {
+    return { failed: true };
+  }
+  override render(): ReactNode {
+    return this.state.failed ? this.props.fallback : this.props.children;
+  }
+}
