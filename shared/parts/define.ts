@@ -119,12 +119,12 @@ export function defineRecipe<const P extends Specs>(spec: RecipeSpec<P>): PartRe
     params,
     check: (input) => {
       const judged = judge(spec, params, input);
-      return 'values' in judged ? { ok: true, params: judged.values as Params } : { ok: false, faults: judged.faults };
+      return 'values' in judged ? { ok: true, params: judged.values } : { ok: false, faults: judged.faults };
     },
     build: (input) => {
       const judged = judge(spec, params, input);
       if (!('values' in judged)) return { ok: false, faults: judged.faults };
-      return { ok: true, part: spec.build(judged.values), params: judged.values as Params };
+      return { ok: true, part: spec.build(judged.values), params: judged.values };
     },
     facts: (input) => {
       const judged = judge(spec, params, input);
