@@ -2,7 +2,7 @@
 // sees values that it can build.
 import { formatAngle, formatLength } from '#shared/units';
 import type { Category } from '#shared/scene';
-import type { Built, ChoiceParam, Fact, Fault, NumberParam, Origin, Param, Params, PartRecipe } from './types';
+import type { Built, ChoiceParam, Fact, Fault, NumberParam, Origin, Param, PartRecipe } from './types';
 
 export const PRACTICE: Origin = 'common practice, no source';
 export const MEMORY: Origin = 'from memory';
