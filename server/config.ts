@@ -46,7 +46,7 @@ const settings = z.object({
     .min(1)
     .max(256 * 1024 * 1024)
     .default(256 * 1024 * 1024),
-  /** Dry fits that this process works on at a time. */
+  /** Dry fits that this process works on at a time; 0 leaves all jobs to other servers. */
   DRY_FIT_WORKERS: z.coerce.number().int().min(0).max(64).default(1),
 });
 

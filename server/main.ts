@@ -54,16 +54,19 @@ async function main(): Promise<void> {
     { config, db, auth, mailer, store, jobs, limits, log, ready: () => isReady },
     existsSync(clientFolder) ? { clientFolder } : {},
   );
-  const runner = await startJobs({
-    db,
-    pool,
-    log,
-    concurrency: Math.max(1, config.dryFitWorkers),
-    handlers: {
-      'dry-fit': (payload, signal) => runDryFitJob({ db, store, log }, payload.dryFitId, signal),
-      sweep: () => sweep(db, store),
-    },
-  });
+  const runner =
+    config.dryFitWorkers === 0
+      ? null
+      : await startJobs({
+          db,
+          pool,
+          log,
+          concurrency: config.dryFitWorkers,
+          handlers: {
+            'dry-fit': (payload, signal) => runDryFitJob({ db, store, log }, payload.dryFitId, signal),
+            sweep: () => sweep(db, store),
+          },
+        });
   const { createServer } = await import('node:http');
   const server = createServer(app);
   // large meshes over slow lines take long; headers must not
@@ -75,7 +78,7 @@ async function main(): Promise<void> {
     if (isEnding) return;
     isEnding = true;
     isReady = false;
-    await Promise.all([close(server), runner.stop()]);
+    await Promise.all([close(server), runner?.stop()]);
     mailer.close();
     await database.close();
   };
