@@ -11,7 +11,7 @@ import { motionKey } from './bodies';
 import { blobOf, drawPicture, type Picture } from './capture';
 import { sceneBox } from './extent';
 import type { Rig } from './rig';
-import { setRecede } from './stage-view';
+import { setRecede } from './running';
 import type { Stage, StageState } from './stage';
 import { cross, dot, length, scale, sizeOf, sub, unit, type Triple } from './vectors';
 import { eyeDirection, fitView, type FreeArea, type View } from './view';

@@ -5,7 +5,7 @@ import { useBench, type Bench } from '../bench-model';
 import { clickPart } from '../click-part';
 import { cutOf } from '../cutaway/cut-of';
 import { pickAll, type Hit } from './picking';
-import type { Running } from './stage-view';
+import type { Running } from './running';
 
 /** A pointer that moved no farther was a click, px. */
 const CLICK = 5;
