@@ -25,6 +25,11 @@ import { NoViewport } from './viewport/no-viewport';
 import { Viewport, ViewportBoundary } from './viewport/viewport';
 import { hasWebGl2 } from './viewport/webgl';
 import { useOpen } from './bench-model';
+import './styles/bench.css';
+import './styles/ladder.css';
+import './styles/rail.css';
+import './styles/sheets.css';
+import './styles/tape.css';
 
 export interface BenchProps {
   /** Buttons of the top bar that belong to others: taking a picture, running a dry fit. */

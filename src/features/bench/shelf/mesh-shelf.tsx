@@ -13,7 +13,7 @@ import { meshesQuery } from '../../../lib/queries/meshes';
 import { useFacts, useOpen } from '../bench-model';
 import { plainPart } from '../new-parts';
 import { CATEGORY_FOR } from './roll-call-categories';
-import type { BoardProps } from './shelf';
+import type { BoardProps } from './board';
 
 /** Names of files make names of parts: without ending, with spaces. */
 const partName = (file: string): string =>

@@ -12,7 +12,7 @@ import { useFacts, useOpen } from '../bench-model';
 import { plainPart } from '../new-parts';
 import { LengthTriple } from '../tape/triple-fields';
 import { CATEGORY_FOR } from './roll-call-categories';
-import type { BoardProps } from './shelf';
+import type { BoardProps } from './board';
 
 export function PlainShelf({ wanted, at, onPlace }: BoardProps) {
   const { display, words } = useFacts();

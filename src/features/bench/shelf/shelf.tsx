@@ -2,7 +2,6 @@
 import { useState } from 'react';
 import { RECIPES, recipeOf } from '#shared/parts';
 import { edits, type Component } from '#shared/scene';
-import type { RollCallKey } from '#shared/review';
 import { Dialog } from '../../../components/dialog';
 import { Tabs } from '../../../components/tabs';
 import { notify } from '../../../components/toast';
@@ -10,6 +9,7 @@ import { inWords } from '../../../lib/part-words';
 import { useBench, useFacts, useSession } from '../bench-model';
 import { roundPlace } from '../new-parts';
 import type { Triple } from '../viewport/vectors';
+import type { BoardProps } from './board';
 import { MeshShelf } from './mesh-shelf';
 import { PlainShelf } from './plain-shelf';
 import { RecipeForm } from './recipe-form';
@@ -65,14 +65,6 @@ function Shelves() {
       ]}
     />
   );
-}
-
-export interface BoardProps {
-  /** What the roll-call misses, if the shelf was opened from there. */
-  readonly wanted: RollCallKey | null;
-  /** Where a new part goes. */
-  readonly at: () => Triple;
-  readonly onPlace: (component: Component) => void;
 }
 
 function ReadyShelf({ wanted, at, onPlace }: BoardProps) {

@@ -1,6 +1,6 @@
 // A mesh as it is drawn: smooth where it is round, sharp where it has an edge, its edges and outline scribed.
 import type { DisplayMesh } from '#shared/api';
-import type { Drawn, Scribe, Surface } from './shapes';
+import type { Drawn, Scribe, Surface } from './drawn';
 
 /** Faces that meet at less than this are one rounded surface: cosine of 32 degrees. */
 const SMOOTH = Math.cos((32 * Math.PI) / 180);

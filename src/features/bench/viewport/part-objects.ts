@@ -9,7 +9,8 @@ import type { PartLook } from './look';
 import type { MeshSource } from './mesh-source';
 import { toMatrix } from './rigid-matrix';
 import { createScribeMaterial, scribeGeometry, setLine } from './scribe-material';
-import { drawnSolid, mergeDrawn, type Surface } from './shapes';
+import type { Surface } from './drawn';
+import { drawnSolid, mergeDrawn } from './shapes';
 
 /** How a part stands among the others just now. */
 export interface PartStanding {

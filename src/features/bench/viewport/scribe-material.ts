@@ -10,7 +10,7 @@ import {
 } from 'three';
 import { tokenColour } from './colours';
 import type { SharedLight } from './light';
-import type { Scribe } from './shapes';
+import type { Scribe } from './drawn';
 
 const VERTEX = /* glsl */ `
   attribute vec3 from;

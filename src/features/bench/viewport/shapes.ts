@@ -1,31 +1,10 @@
 // What a solid looks like: a surface to fill and lines to scribe, in the solid's own frame, mm.
 import type { Solid } from '#shared/scene';
 import type { Rigid } from '#shared/units';
+import type { Drawn, Scribe, Surface } from './drawn';
 import { drawnMesh } from './drawn-mesh';
 import type { MeshSource } from './mesh-source';
 import { add, centreOf, scale, sizeOf, type Triple } from './vectors';
-
-export interface Surface {
-  readonly positions: Float32Array;
-  readonly normals: Float32Array;
-  readonly index: Uint32Array;
-}
-
-/**
- * Lines, six numbers a line for its ends and six for the normals of the two faces beside it. A line with zero normals is
- * always drawn; the others only where they are the outline, with one face towards the eye and one away.
- */
-export interface Scribe {
-  readonly ends: Float32Array;
-  readonly normals: Float32Array;
-}
-
-export interface Drawn {
-  readonly surface: Surface;
-  readonly scribe: Scribe;
-  /** Whether its surface is closed, so that its inside never shows. */
-  readonly closed: boolean;
-}
 
 /** A mesh that is not there yet shows as its box; null where not even that is known. */
 export function drawnSolid(solid: Solid, meshes: MeshSource): Drawn | null {
