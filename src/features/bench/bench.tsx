@@ -38,7 +38,7 @@ export interface BenchProps {
   readonly startFinding?: string | null;
 }
 
-const WIDE: Insets = { left: 24, right: 344, top: 150, bottom: 150 };
+const WIDE: Insets = { left: 24, right: 368, top: 150, bottom: 150 };
 const NARROW: Insets = { left: 0, right: 0, top: 104, bottom: 170 };
 
 export function Bench({ actions, startFinding = null }: BenchProps) {

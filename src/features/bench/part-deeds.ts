@@ -49,18 +49,32 @@ export function duplicate(stores: Stores): void {
   stores.session.getState().select(copied);
 }
 
+export interface Removed {
+  readonly names: readonly string[];
+  /** Brings them back, as long as nothing else was done since. */
+  readonly undo: () => void;
+}
+
 /** Takes parts out of the document; undo brings them back. */
-export function remove(stores: Stores): readonly string[] {
+export function remove(stores: Stores): Removed | null {
   const { moving } = selectionNow(stores);
-  if (!mayEdit(stores) || moving.size === 0) return [];
+  if (!mayEdit(stores) || moving.size === 0) return null;
   const { scene, apply } = stores.open.getState();
   const ids = [...moving];
   const names = ids.map((id) => scene.components.find((c) => c.id === id)?.name ?? id);
   const label = labelOf('Delete', scene, { parts: ids, group: null });
   apply(checked(label, (s) => withoutEmptyGroups(removeComponents(s, ids))));
   stores.session.getState().select([]);
-  return names;
+  const after = stores.open.getState().scene;
+  const undo = (): void => {
+    const { scene: now, undo: takeBack } = stores.open.getState();
+    if (now === after) takeBack();
+  };
+  return { names, undo };
 }
+
+export const sayRemoved = (names: readonly string[]): string =>
+  `Deleted ${names.length === 1 ? names[0] : `${names.length} parts`}.`;
 
 function withoutEmptyGroups(scene: Scene): Scene {
   const empty = scene.groups.filter((g) => !scene.components.some((c) => c.group === g.id));

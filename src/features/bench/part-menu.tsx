@@ -3,7 +3,7 @@ import { DropdownMenu } from 'radix-ui';
 import { notify } from '../../components/toast';
 import { MenuItem, MenuLabel, MenuRule } from '../../components/menu';
 import { useBench, useOpen, useSession } from './bench-model';
-import { clamp, duplicate, partGroup, remove, takeOutOfGroup } from './part-deeds';
+import { clamp, duplicate, partGroup, remove, sayRemoved, takeOutOfGroup } from './part-deeds';
 import { useSelection } from './use-selection';
 import { sceneBox } from './viewport/extent';
 
@@ -86,11 +86,8 @@ function Items() {
           <MenuItem
             danger
             onSelect={() => {
-              const names = remove(bench);
-              notify({
-                text: `Deleted ${names.length === 1 ? names[0] : `${names.length} parts`}.`,
-                undo: () => bench.open.getState().undo(),
-              });
+              const removed = remove(bench);
+              if (removed !== null) notify({ text: sayRemoved(removed.names), undo: removed.undo });
             }}
           >
             Delete

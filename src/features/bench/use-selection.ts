@@ -18,7 +18,8 @@ export interface Selection {
 export function selectionOf(scene: Scene, selected: readonly string[], reach: Reach): Selection {
   const ids = selected.filter((id) => scene.components.some((c) => c.id === id));
   const main = scene.components.find((c) => c.id === ids.at(-1)) ?? null;
-  const group = reach === 'group' ? (main?.group ?? null) : null;
+  const isOne = ids.every((id) => scene.components.find((c) => c.id === id)?.group === main?.group);
+  const group = reach === 'group' && isOne ? (main?.group ?? null) : null;
   const members = group === null ? [] : scene.components.filter((c) => c.group === group).map((c) => c.id);
   return { ids, main, group, moving: new Set([...ids, ...members]) };
 }

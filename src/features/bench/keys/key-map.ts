@@ -4,7 +4,7 @@ import { pictureAxes } from '../viewport/view';
 import type { Bench } from '../bench-model';
 import { closeFinding, openFinding } from '../open-finding';
 import { findingKey } from '../finding-words';
-import { clamp, duplicate, nudge, partGroup, remove, selectionNow, turnBy } from '../part-deeds';
+import { clamp, duplicate, nudge, partGroup, remove, sayRemoved, selectionNow, turnBy } from '../part-deeds';
 import { STANDPOINTS } from '../standpoints/standpoints';
 import { TURN_STEP } from '../steps';
 import { pairRungs } from '../ladder/rungs';
@@ -254,10 +254,8 @@ export const KEYS: readonly KeyDeed[] = [
     section: 'Moving',
     edits: true,
     run: (c) => {
-      const names = remove(c);
-      if (names.length > 0) {
-        c.say(`Deleted ${names.length === 1 ? names[0] : `${names.length} parts`}.`, () => c.open.getState().undo());
-      }
+      const removed = remove(c);
+      if (removed !== null) c.say(sayRemoved(removed.names), removed.undo);
     },
   },
   {

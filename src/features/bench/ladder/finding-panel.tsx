@@ -49,7 +49,7 @@ export function FindingPanel({ finding }: { readonly finding: Finding }) {
         <div>
           <h3>{pairName(scene, finding)}</h3>
           <p className="finding-verdict">
-            <Reading finding={finding} withWord /> <span className="text-soft">{where(scene, finding)}</span>
+            <Reading finding={finding} /> <span className="text-soft">{where(scene, finding)}</span>
           </p>
         </div>
         <IconButton label="Close the finding" onClick={() => closeFinding(bench)}>

@@ -43,8 +43,13 @@ export function freeingOf(scene: Scene, finding: Finding): Freeing | null {
   return { part, vector: v, moves: movesOf(v, LEAST), verified: false };
 }
 
-/** A part that is clamped in a group takes the group along: a pedal box moves as one. */
-export function movedBy(scene: Scene, freeing: Freeing): Moved {
-  const group = scene.components.find((c) => c.id === freeing.part)?.group ?? null;
-  return { parts: [freeing.part], group };
+/**
+ * A part that is clamped in a group takes the group along: a pedal box moves as one. Not where the other of the pair is
+ * clamped in it too: the two would stay as they are to one another.
+ */
+export function movedBy(scene: Scene, freeing: Freeing, between: Finding['between']): Moved {
+  const groupOf = (id: string): string | undefined => scene.components.find((c) => c.id === id)?.group;
+  const group = groupOf(freeing.part);
+  const isShared = between.every((id) => groupOf(id) === group);
+  return { parts: [freeing.part], group: isShared ? null : (group ?? null) };
 }

@@ -1,19 +1,17 @@
 // The gap ladder: every pair that matters on one steel rule, by how much more room it has than it needs.
-import { useCallback, useRef } from 'react';
+import { useCallback, useMemo, useRef } from 'react';
 import { useBench, useFacts, useLive, useOpen, useSession } from '../bench-model';
 import { pairName } from '../finding-words';
 import { openFinding } from '../open-finding';
 import { useElementSize } from '../use-element-size';
 import { QuietLine } from './quiet-line';
 import { RungLabel } from './rung-label';
-import { labelHeight } from './label-height';
-import type { Rung } from './rungs';
+import { LABEL_HEIGHT, labelForm, type LabelForm } from './label-form';
+import { isJoint, pairRungs, type Rung } from './rungs';
 import { spreadLabels } from './spread';
 import { RULE_WIDTH, SteelRule } from './steel-rule';
 import { useLadder } from './use-ladder';
 
-/** Least height of a label, so that a finger finds it. */
-const LEAST_LABEL = 26;
 const LEADER = 30;
 
 export function GapLadder() {
@@ -42,16 +40,24 @@ function Rungs({ width, height }: RungsProps) {
   const open = useSession((s) => s.finding);
   const hovered = useSession((s) => s.hoveredFinding);
   const phase = useLive((live) => live.phase);
+  const findings = useLive((live) => live.findings);
   const room = width - RULE_WIDTH - LEADER;
-  const heightOf = useCallback(
-    (rung: Rung): number => labelHeight(pairName(scene, rung.finding), room, LEAST_LABEL),
-    [scene, room],
+  const all = useMemo(() => pairRungs(findings), [findings]);
+  const roomy = useCallback(
+    (rung: Rung): LabelForm => labelForm(pairName(scene, rung.finding), rung.finding, display, room),
+    [scene, display, room],
   );
+  const isDense = useMemo(() => {
+    const bad = all.filter((r) => r.finding.verdict !== 'clears' && !isJoint(r));
+    return bad.reduce((sum, r) => sum + LABEL_HEIGHT[roomy(r)], 0) > height;
+  }, [all, roomy, height]);
+  const formOf = useCallback((rung: Rung): LabelForm => (isDense ? 'dense' : roomy(rung)), [isDense, roomy]);
+  const heightOf = useCallback((rung: Rung): number => LABEL_HEIGHT[formOf(rung)], [formOf]);
   const fits = useCallback(
     (shown: readonly Rung[]): boolean => shown.reduce((sum, r) => sum + heightOf(r), 0) <= height,
     [heightOf, height],
   );
-  const { ladder, span } = useLadder(fits);
+  const { ladder, span } = useLadder(all, fits);
   // the worst have the first claim to a label
   const rungs = ladder.rungs;
   const most = countFitting(rungs.map(heightOf), height);
@@ -72,7 +78,7 @@ function Rungs({ width, height }: RungsProps) {
   return (
     <>
       <div className="ladder-above">
-        <QuietLine ladder={ladder} span={span} />
+        <QuietLine ladder={ladder} span={span} unlabelled={rungs.length - labelled.length} />
       </div>
       <SteelRule span={span} height={height} display={display} />
       <svg className="ladder-leaders" width={width} height={height} aria-hidden="true">
@@ -123,7 +129,7 @@ function Rungs({ width, height }: RungsProps) {
               scene={scene}
               isOpen={isOfPair(open, r)}
               isPinned={r.height < span.bottom}
-              height={heights[i]!}
+              form={formOf(r)}
               onOpen={() => openFinding(bench, r.finding)}
               onPoint={(isOver) => bench.session.getState().set({ hoveredFinding: isOver ? r.key : null })}
             />

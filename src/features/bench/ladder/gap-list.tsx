@@ -64,7 +64,7 @@ function List({ onChoose }: { readonly onChoose: (finding: Finding) => void }) {
             <button type="button" onClick={() => onChoose(f)}>
               <span className="gap-list-pair">{pairName(scene, f)}</span>
               <span className="gap-list-when">{when(scene, f)}</span>
-              <Reading finding={f} withWord />
+              <Reading finding={f} />
             </button>
           </li>
         ))}

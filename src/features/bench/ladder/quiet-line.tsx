@@ -4,11 +4,18 @@ import { VerdictMark } from '../../../components/verdict-mark';
 import { useBench, useFacts } from '../bench-model';
 import type { Ladder, Span } from './rungs';
 
-export function QuietLine({ ladder, span }: { readonly ladder: Ladder; readonly span: Span }) {
+interface QuietLineProps {
+  readonly ladder: Ladder;
+  readonly span: Span;
+  /** Rungs that stand on the rule without a label, for want of room. */
+  readonly unlabelled: number;
+}
+
+export function QuietLine({ ladder, span, unlabelled }: QuietLineProps) {
   const { session } = useBench();
   const { display } = useFacts();
   const { above, seated, loose } = ladder;
-  if (above.length + seated.length + loose.length === 0) return null;
+  if (above.length + seated.length + loose.length + unlabelled === 0) return null;
   return (
     <button type="button" className="ladder-quiet" onClick={() => session.getState().set({ sheet: 'gaps' })}>
       {loose.length > 0 && <VerdictMark verdict="loose" count={loose.length} />}
@@ -18,6 +25,7 @@ export function QuietLine({ ladder, span }: { readonly ladder: Ladder; readonly 
           {above.length} more with over {formatLength(span.top, display)} to spare
         </span>
       )}
+      {unlabelled > 0 && <span>{unlabelled} on the rule without a label</span>}
     </button>
   );
 }

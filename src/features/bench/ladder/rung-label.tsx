@@ -1,38 +1,51 @@
 import type { Scene } from '#shared/scene';
 import { classes } from '../../../components/classes';
-import { pairName } from '../finding-words';
+import { nameOf, pairName } from '../finding-words';
 import { Reading } from '../reading';
+import { LABEL_HEIGHT, type LabelForm } from './label-form';
 import type { Rung } from './rungs';
 
 interface RungLabelProps {
   readonly rung: Rung;
   readonly scene: Scene;
+  readonly form: LabelForm;
   readonly isOpen: boolean;
   /** Deeper than the rule reaches. */
   readonly isPinned: boolean;
-  readonly height: number;
   readonly onOpen: () => void;
   readonly onPoint: (isOver: boolean) => void;
 }
 
-export const RungLabel = ({ rung, scene, isOpen, isPinned, height, onOpen, onPoint }: RungLabelProps) => (
-  <button
-    type="button"
-    className={classes('rung', isOpen && 'rung-open')}
-    style={{ height }}
-    aria-expanded={isOpen}
-    onClick={onOpen}
-    onPointerEnter={() => onPoint(true)}
-    onPointerLeave={() => onPoint(false)}
-    onFocus={() => onPoint(true)}
-    onBlur={() => onPoint(false)}
-  >
-    <span className="rung-name">{pairName(scene, rung.finding)}</span>
-    <Reading finding={rung.finding} />
-    {isPinned && (
-      <span className="rung-deeper" aria-label="deeper than the rule shows">
-        {'\u2193'}
-      </span>
-    )}
-  </button>
-);
+export function RungLabel({ rung, scene, form, isOpen, isPinned, onOpen, onPoint }: RungLabelProps) {
+  const { finding } = rung;
+  const names = pairName(scene, finding);
+  return (
+    <button
+      type="button"
+      className={classes('rung', `rung-${form}`, isOpen && 'rung-open')}
+      style={{ height: LABEL_HEIGHT[form] }}
+      title={form === 'line' ? undefined : names}
+      aria-expanded={isOpen}
+      onClick={onOpen}
+      onPointerEnter={() => onPoint(true)}
+      onPointerLeave={() => onPoint(false)}
+      onFocus={() => onPoint(true)}
+      onBlur={() => onPoint(false)}
+    >
+      {form === 'pair' ? (
+        <span className="rung-names">
+          <span>{nameOf(scene, finding.between[0])}, </span>
+          <span>{nameOf(scene, finding.between[1])}</span>
+        </span>
+      ) : (
+        <span className="rung-name">{names}</span>
+      )}
+      <Reading finding={finding} form={form === 'pair' ? 'stacked' : form === 'dense' ? 'short' : 'line'} />
+      {isPinned && (
+        <span className="rung-deeper" role="img" aria-label="deeper than the rule shows">
+          {'\u2193'}
+        </span>
+      )}
+    </button>
+  );
+}

@@ -52,7 +52,7 @@ const TOPS_MM = [40, 25, 20, 15, 10, 5] as const;
 const BOTTOMS_IN = [0.25, 0.5, 0.75, 1, 1.5] as const;
 const BOTTOMS_MM = [5, 10, 15, 25, 40] as const;
 
-const isJoint = ({ finding }: Rung): boolean => finding.verdict === 'seated' || finding.verdict === 'loose';
+export const isJoint = ({ finding }: Rung): boolean => finding.verdict === 'seated' || finding.verdict === 'loose';
 
 /**
  * The height of the rule: as much as can be labelled, at most 1 1/2 in or 40 mm; its foot reaches the deepest hit.

@@ -1,6 +1,6 @@
 import { useMemo, useState } from 'react';
-import { useFacts, useLive, useOpen } from '../bench-model';
-import { ladderOf, pairRungs, spanOf, type Ladder, type Rung, type Span } from './rungs';
+import { useFacts, useOpen } from '../bench-model';
+import { ladderOf, spanOf, type Ladder, type Rung, type Span } from './rungs';
 
 const isSameSpan = (a: Span, b: Span): boolean => a.top === b.top && a.bottom === b.bottom;
 
@@ -8,11 +8,12 @@ const isSameSpan = (a: Span, b: Span): boolean => a.top === b.top && a.bottom ==
  * The ladder of the live findings. While something is dragged the rule keeps its length, so that only the rungs move.
  * @param fits kept between calls, or the rule is worked out anew each time
  */
-export function useLadder(fits: (shown: readonly Rung[]) => boolean): { readonly ladder: Ladder; readonly span: Span } {
+export function useLadder(
+  rungs: readonly Rung[],
+  fits: (shown: readonly Rung[]) => boolean,
+): { readonly ladder: Ladder; readonly span: Span } {
   const { display } = useFacts();
-  const findings = useLive((live) => live.findings);
   const isDragging = useOpen((open) => open.preview !== null);
-  const rungs = useMemo(() => pairRungs(findings), [findings]);
   const fitting = useMemo(() => spanOf(rungs, display, fits), [rungs, display, fits]);
   const [held, setHeld] = useState(fitting);
   const span = isDragging ? held : fitting;

@@ -6,19 +6,20 @@ import { Button } from '../../../components/button';
 import { useBench, useFacts, useOpen } from '../bench-model';
 import { labelOf, shift } from '../edits';
 import { nameOf } from '../finding-words';
-import { freeingOf, movedBy } from './freeing';
+import { freeingOf, movedBy, type Freeing } from './freeing';
 
 export function WhatWouldChangeIt({ finding }: { readonly finding: Finding }) {
   const { open } = useBench();
   const { display } = useFacts();
   const scene = useOpen((o) => o.scene);
   const canEdit = useOpen((o) => o.canEdit);
-  const [isTrying, setTrying] = useState(false);
+  // what is tried stays what it was, though the finding moves with it
+  const [tried, setTried] = useState<Freeing | null>(null);
   const { setPreview } = open.getState();
   useEffect(() => () => setPreview(null), [setPreview]);
-  const freeing = freeingOf(scene, finding);
+  const freeing = tried ?? freeingOf(scene, finding);
   if (freeing === null) return null;
-  const moved = movedBy(scene, freeing);
+  const moved = movedBy(scene, freeing, finding.between);
   const group = scene.groups.find((g) => g.id === moved.group);
   const way = freeing.moves.map((m) => `${formatNeed(m.distance, display)} ${m.direction}`).join(' and ');
   const name = nameOf(scene, freeing.part);
@@ -41,19 +42,20 @@ export function WhatWouldChangeIt({ finding }: { readonly finding: Finding }) {
         <div className="freeing-deeds">
           <Button
             size="small"
-            aria-pressed={isTrying}
+            aria-pressed={tried !== null}
             onClick={() => {
-              setPreview(isTrying ? null : edit.edit);
-              setTrying(!isTrying);
+              setPreview(tried === null ? edit.edit : null);
+              setTried(tried === null ? freeing : null);
             }}
           >
-            {isTrying ? 'Put it back' : 'Try it'}
+            {tried !== null ? 'Put it back' : 'Try it'}
           </Button>
           <Button
             size="small"
             kind="main"
             onClick={() => {
-              setTrying(false);
+              setTried(null);
+              setPreview(null);
               open.getState().apply(edit);
             }}
           >

@@ -59,7 +59,8 @@ export function Overlay() {
     selected: selection.moving,
     isOff: (id) => presence[id] === 'off',
   });
-  marks.push(...witnessMarks(frame, witnesses, display, room));
+  const card = document.querySelector('.tape')?.getBoundingClientRect();
+  marks.push(...witnessMarks(frame, witnesses, display, room, card === undefined ? [] : [card]));
   const part = scene.components.find((c) => c.id === hovered);
   if (part !== undefined && !selection.moving.has(part.id)) {
     const box = componentBox(scene, part, meshes);

@@ -18,7 +18,7 @@ export interface Place {
   readonly y: number;
 }
 
-interface Rect extends Place {
+export interface Rect extends Place {
   readonly width: number;
   readonly height: number;
 }
@@ -48,9 +48,9 @@ function* offers({ anchor, width, height }: Label): Generator<Place> {
   }
 }
 
-/** Places for labels, in their order; the first have the first choice. */
-export function placeLabels(labels: readonly Label[], room: Room): Place[] {
-  const taken: Rect[] = [];
+/** Places for labels, in their order; the first have the first choice. @param blocked where something else lies already */
+export function placeLabels(labels: readonly Label[], room: Room, blocked: readonly Rect[] = []): Place[] {
+  const taken: Rect[] = [...blocked];
   const anchors = labels.map(({ anchor }): Rect => ({
     x: anchor[0] - CLEAR,
     y: anchor[1] - CLEAR,

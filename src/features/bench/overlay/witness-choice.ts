@@ -3,6 +3,8 @@ import { findingKey, type Finding } from '#shared/check';
 import type { WitnessInput } from './witness';
 
 const MOST = 14;
+/** So many carry a label; the others their mark alone. */
+const MOST_LABELS = 7;
 /** For the selected part its nearest neighbours are shown too, clear as they may be. */
 const NEIGHBOURS = 4;
 
@@ -33,6 +35,9 @@ export function chooseWitnesses({ findings, open, hovered, selected, isOff }: Wi
       // joints are many and say little about room: only those of what is selected
       (f.verdict === 'loose' && f.between.some((id) => selected.has(id))),
   );
+  // what is selected comes first
+  const isAsked = (f: Finding): boolean => f.between.some((id) => selected.has(id));
+  bad.sort((a, b) => Number(isAsked(b)) - Number(isAsked(a)));
   const near = findings
     .filter((f) => f.verdict === 'clears' && f.between.some((id) => selected.has(id)))
     .sort((a, b) => a.margin - b.margin)
@@ -42,5 +47,9 @@ export function chooseWitnesses({ findings, open, hovered, selected, isOff }: Wi
     if (pairs.has(f.between.join('|')) || f.between.some(isOff)) continue;
     put(f);
   }
-  return [...chosen.values()].map((finding) => ({ finding, isOpen: findingKey(finding) === hovered }));
+  return [...chosen.values()].map((finding, i) => ({
+    finding,
+    isOpen: findingKey(finding) === hovered,
+    isQuiet: i >= MOST_LABELS || (selected.size > 0 && !isAsked(finding) && findingKey(finding) !== hovered),
+  }));
 }

@@ -4,13 +4,15 @@ import type { LengthDisplay } from '#shared/units';
 import { readingOf } from '../finding-words';
 import { project, type Frame } from '../viewport/frame';
 import { lengthRuns, plain, widthOf, type Mark, type TextRun } from './mark';
-import { placeLabels, type Room } from './place-labels';
+import { placeLabels, type Rect, type Room } from './place-labels';
 import { verdictGlyph } from './verdict-glyph';
 
 export interface WitnessInput {
   readonly finding: Finding;
   /** Drawn larger, with its word, and before all others. */
   readonly isOpen: boolean;
+  /** Its mark alone: labels of all would hide what they are about. */
+  readonly isQuiet?: boolean;
 }
 
 interface Drawn extends WitnessInput {
@@ -121,15 +123,16 @@ export function witnessMarks(
   inputs: readonly WitnessInput[],
   display: LengthDisplay,
   room: Room,
+  blocked: readonly Rect[] = [],
 ): Mark[] {
   const ordered = [...inputs].sort((x, y) => Number(y.isOpen) - Number(x.isOpen));
   const drawn = ordered.flatMap((input) => read(frame, input, display));
+  const told = drawn.filter((d) => d.isQuiet !== true);
   const places = placeLabels(
-    drawn.map((d) => ({ anchor: d.middle, width: d.width, height: d.size + 12 })),
+    told.map((d) => ({ anchor: d.middle, width: d.width, height: d.size + 12 })),
     room,
+    blocked,
   );
-  return drawn
-    .map((d, i) => [...figure(d), ...label(d, places[i]!.x, places[i]!.y, d.size + 12)])
-    .reverse()
-    .flat();
+  const labels = told.map((d, i) => label(d, places[i]!.x, places[i]!.y, d.size + 12));
+  return [...drawn.map(figure).reverse().flat(), ...labels.reverse().flat()];
 }

@@ -7,6 +7,7 @@ import { VerdictMark } from '../../../components/verdict-mark';
 import { finishOf } from '../../../lib/finishes';
 import type { Presence } from '../session';
 import { EyeMark } from './eye-mark';
+import { nameWidth } from './tag-width';
 
 export interface PartTagProps {
   readonly part: Component;
@@ -60,7 +61,9 @@ export function PartTag({
         onClick={(event) => onChoose(event.shiftKey)}
       >
         <Hole through="var(--dye-deep)" />
-        <span className="tag-name">{part.name}</span>
+        <span className="tag-name" style={{ width: nameWidth(part.name) }} title={part.name}>
+          {part.name}
+        </span>
         {isTold && <VerdictMark verdict={worst} wordHidden className="tag-verdict" />}
         {part.source === 'guess' && <span className="sr-only">, measures are a guess</span>}
         {presence === 'faded' && <span className="sr-only">, faded</span>}

@@ -40,7 +40,13 @@ export function PartsRail() {
           {scene.groups.length > 0 ? 'A second click on a tag takes its whole group.' : ''}
         </span>
       </div>
-      <div className="rail-row" ref={rail}>
+      <div
+        className="rail-row"
+        ref={rail}
+        onWheel={(event) => {
+          if (event.deltaX === 0) event.currentTarget.scrollLeft += event.deltaY;
+        }}
+      >
         {clusters.map((cluster) => (
           <RailCluster
             key={cluster.key}

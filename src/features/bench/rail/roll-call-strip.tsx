@@ -1,5 +1,6 @@
 // The roll-call in a line: how much of what belongs in the zone is there. It opens the whole list.
-import { missingFrom, type RollCallEntry } from '#shared/review';
+import { useMemo } from 'react';
+import { looseBoxes, missingFrom, type LooseBox, type RollCallEntry } from '#shared/review';
 import { Button } from '../../../components/button';
 import { Dialog } from '../../../components/dialog';
 import { inWords } from '../../../lib/part-words';
@@ -10,7 +11,9 @@ import { useRollCall } from './use-roll-call';
 export function RollCallStrip() {
   const { session } = useBench();
   const { entries } = useRollCall();
+  const { words } = useFacts();
   const missing = missingFrom(entries).length;
+  const loose = useLooseBoxes();
   return (
     <>
       <button type="button" className="roll-call" onClick={() => session.getState().set({ sheet: 'roll-call' })}>
@@ -21,10 +24,19 @@ export function RollCallStrip() {
           ))}
         </span>
         <span>{missing === 0 ? 'all answered' : `${missing} missing`}</span>
+        {loose.length > 0 && <span className="roll-call-warning">{inWords(sayLoose(loose[0]!), words)}</span>}
       </button>
       <RollCallSheet />
     </>
   );
+}
+
+/** A pedal box that hangs on one plane only. */
+const sayLoose = ({ name, lacks }: LooseBox): string => `${name} has no joint to the ${lacks.join(' and the ')}`;
+
+function useLooseBoxes(): readonly LooseBox[] {
+  const scene = useOpen((o) => o.scene);
+  return useMemo(() => looseBoxes(scene), [scene]);
 }
 
 const STATE_WORDS: Readonly<Record<RollCallEntry['state'], string>> = {
@@ -41,6 +53,7 @@ function RollCallSheet() {
   const canEdit = useOpen((o) => o.canEdit);
   const { entries, answer } = useRollCall();
   const { set } = session.getState();
+  const loose = useLooseBoxes();
   return (
     <Dialog
       open={isOpen}
@@ -50,6 +63,12 @@ function RollCallSheet() {
       title="Roll-call"
       lead="The worst mistake is a part that was left out. Each of these is placed, or not on this car; there is no third."
     >
+      {loose.map((box) => (
+        <p key={box.name} className="roll-loose">
+          <b>{inWords(sayLoose(box), words)}.</b>{' '}
+          {inWords('A box that is bolted to only one of the two flexes. Joint its parts to firewall and cowl.', words)}
+        </p>
+      ))}
       <ul className="roll-list">
         {entries.map((entry) => (
           <li key={entry.key} data-state={entry.state}>

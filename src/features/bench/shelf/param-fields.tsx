@@ -12,12 +12,14 @@ export interface ParamFieldsProps {
   readonly faults: readonly Fault[];
   readonly disabled: boolean;
   readonly onChange: (key: string, value: number | string) => void;
+  /** Rows with the figure beside its name, as on the tape. */
+  readonly compact?: boolean;
 }
 
-export function ParamFields({ recipe, params, faults, disabled, onChange }: ParamFieldsProps) {
+export function ParamFields({ recipe, params, faults, disabled, onChange, compact = false }: ParamFieldsProps) {
   const known = new Set(recipe.params.map((p) => p.key));
   return (
-    <div className="params">
+    <div className={compact ? 'params params-compact' : 'params'}>
       {recipe.params.map((param) => (
         <ParamField
           key={param.key}
@@ -25,6 +27,7 @@ export function ParamFields({ recipe, params, faults, disabled, onChange }: Para
           value={params[param.key] ?? param.default}
           error={faults.find((f) => f.key === param.key)?.message ?? null}
           disabled={disabled}
+          look={compact ? 'measure' : 'form'}
           onChange={(value) => onChange(param.key, value)}
         />
       ))}
@@ -44,10 +47,11 @@ interface ParamFieldProps {
   readonly value: number | string;
   readonly error: string | null;
   readonly disabled: boolean;
+  readonly look: 'form' | 'measure';
   readonly onChange: (value: number | string) => void;
 }
 
-function ParamField({ param, value, error, disabled, onChange }: ParamFieldProps) {
+function ParamField({ param, value, error, disabled, look, onChange }: ParamFieldProps) {
   const { display } = useFacts();
   const hint = `${param.help} ${param.origin === 'drawn by eye, no source' ? 'Drawn by eye.' : sentence(param.origin)}`;
   if (param.unit === 'choice') {
@@ -69,7 +73,7 @@ function ParamField({ param, value, error, disabled, onChange }: ParamFieldProps
     );
   }
   const number = Number(value);
-  const shared = { label: param.label, value: number, disabled, error, hint };
+  const shared = { label: param.label, value: number, disabled, error, hint, look };
   if (param.unit === 'angle') return <AngleField {...shared} least={param.min} most={param.max} onCommit={onChange} />;
   if (param.unit === 'count') {
     return <NumberBox label={param.label} value={number} disabled={disabled} onCommit={onChange} />;

@@ -97,7 +97,7 @@ const STANDS: Readonly<Record<StandpointId, (zone: Zone) => Stand>> = {
   bay: ({ all, work, driver }) => ({
     around: 180 + 32 * driver,
     above: 27,
-    box: mixBoxes(all, work, 0.62),
+    box: mixBoxes(all, work, 0.72),
     room: 1.02,
   }),
   overhead: ({ all, work }) => ({ around: 0, above: 76, box: mixBoxes(all, work, 0.4), room: 1.05 }),

@@ -17,6 +17,7 @@ export function RecipeFields({ part }: { readonly part: Component }) {
   return (
     <>
       <ParamFields
+        compact
         recipe={recipe}
         params={params}
         faults={faults}

@@ -7,6 +7,7 @@ import { sceneBox } from '../viewport/extent';
 import { project } from '../viewport/frame';
 import { useMeshVersion } from '../viewport/use-mesh-version';
 import { centreOf } from '../viewport/vectors';
+import { useKeepClear } from './use-keep-clear';
 
 export function TapeLeader() {
   const { frames, meshes } = useBench();
@@ -15,6 +16,7 @@ export function TapeLeader() {
   const { moving } = useSelection();
   const isNarrow = useIsNarrow();
   useMeshVersion();
+  useKeepClear(!isNarrow);
   if (frame === null || isNarrow || moving.size === 0) return null;
   const box = sceneBox(scene, meshes, moving);
   const at = box === null ? null : project(frame, centreOf(box));

@@ -91,7 +91,7 @@ function Clamped() {
     <p className="tape-clamped">
       {group === null ? `one of ${count} in ${own.name}` : `${count} parts together`}
       <button type="button" className="button-text" onClick={() => set({ reach: group === null ? 'group' : 'part' })}>
-        {group === null ? 'take the whole group' : 'this part alone'}
+        {group === null ? 'whole group' : 'this part alone'}
       </button>
     </p>
   );

@@ -14,7 +14,7 @@ import type { Rig } from './rig';
 import { setRecede } from './running';
 import type { Stage, StageState } from './stage';
 import { cross, dot, length, scale, sizeOf, sub, unit, type Triple } from './vectors';
-import { eyeDirection, fitView, type FreeArea, type View } from './view';
+import { eyeDirection, fitView, pannedView, type FreeArea, type View } from './view';
 import type { CameraHand } from './view-control';
 
 export interface HandParts {
@@ -75,6 +75,7 @@ export function cameraHand(parts: HandParts): CameraHand {
       rig.turn(around, above);
     },
     pan: rig.pan,
+    glide: (right, up) => rig.go(pannedView(rig.view(), right, up, area().height), false),
     zoom: rig.zoom,
     hold: rig.hold,
     view: rig.view,

@@ -13,7 +13,7 @@ import { tokenColour } from './colours';
 import type { SharedLight } from './light';
 import { ORDER } from './part-objects';
 import { createScribeMaterial, scribeGeometry } from './scribe-material';
-import { add, cornersOf, cross, dot, scale, sub, unit, type Box, type Triple } from './vectors';
+import { add, cornersOf, cross, dot, scale, sizeOf, sub, unit, type Box, type Triple } from './vectors';
 
 const EDGES: readonly (readonly [number, number])[] = [
   [0, 1],
@@ -84,7 +84,11 @@ export function createCurtains(light: SharedLight): Curtains {
         curtain.renderOrder = ORDER.curtain;
         const ends = ring.flatMap((p, i) => [...p, ...ring[(i + 1) % ring.length]!]);
         const around = new Mesh(
-          scribeGeometry({ ends: Float32Array.from(ends), normals: new Float32Array(ends.length) }),
+          scribeGeometry({
+            ends: Float32Array.from(ends),
+            normals: new Float32Array(ends.length),
+            extents: new Float32Array(ring.length).fill(Math.max(...sizeOf(box))),
+          }),
           line,
         );
         around.frustumCulled = false;

@@ -141,5 +141,23 @@ function scribeOf(p: Float32Array, faces: Float32Array, edges: Edges, triangles:
     line(edges.open[i]!, edges.open[i + 1]!);
     normals.push(0, 0, 0, 0, 0, 0);
   }
-  return { ends: Float32Array.from(ends), normals: Float32Array.from(normals) };
+  return {
+    ends: Float32Array.from(ends),
+    normals: Float32Array.from(normals),
+    extents: new Float32Array(ends.length / 6).fill(reachOf(p)),
+  };
+}
+
+/** The longest side of the box around all points. */
+function reachOf(p: Float32Array): number {
+  let reach = 0;
+  for (let k = 0; k < 3; k += 1) {
+    let [low, high] = [Infinity, -Infinity];
+    for (let i = k; i < p.length; i += 3) {
+      low = Math.min(low, p[i]!);
+      high = Math.max(high, p[i]!);
+    }
+    reach = Math.max(reach, high - low);
+  }
+  return reach;
 }

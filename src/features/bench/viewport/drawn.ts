@@ -13,6 +13,8 @@ export interface Surface {
 export interface Scribe {
   readonly ends: Float32Array;
   readonly normals: Float32Array;
+  /** How large the thing is that a line belongs to, mm, one number a line: lines of what is small on the screen fade. */
+  readonly extents: Float32Array;
 }
 
 export interface Drawn {

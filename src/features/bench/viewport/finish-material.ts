@@ -74,8 +74,8 @@ const FRAGMENT = /* glsl */ `
     if (isVeiled) alpha = mix(veil.x, veil.y, pow(1.0 - facing, 2.0)) + lift * 0.08;
     if (isGuessed) {
       float line = hatch(7.0, 0.7);
-      colour = mix(colour, scribe, line * 0.5);
-      if (isVeiled) alpha = max(alpha, line * 0.34);
+      colour = mix(colour, scribe, line * 0.3);
+      if (isVeiled) alpha = max(alpha, line * 0.24);
     }
     // where it is cut open its inside shows as a section: flat, hatched in its own colour
     if (isInside && isCut && !isVeiled) colour = mix(base * 0.72, scribe, 0.12 + 0.38 * hatch(6.0, 0.6));

@@ -101,7 +101,7 @@ export function placePart(part: PartObjects, scene: Scene, component: Component,
 }
 
 function lineOf({ look, isSelected, isHovered, isBehind }: PartStanding): Parameters<typeof setLine>[1] {
-  if (isSelected) return { colour: 'chalk', width: 2.4, opacity: 1 };
+  if (isSelected) return { colour: 'chalk', width: 2, opacity: 1 };
   if (isHovered) return { colour: 'scribe', width: 1.7, opacity: 1 };
   const faint = look.presence === 'faded' || isBehind;
   if (faint) return { colour: 'scribe-soft', width: 0.9, opacity: look.presence === 'faded' ? 0.28 : 0.4 };

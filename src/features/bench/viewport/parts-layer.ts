@@ -29,7 +29,7 @@ function isStale(part: PartObjects, component: Component, meshVersion: number): 
 export function createPartsLayer(light: SharedLight): PartsLayer {
   const root = new Group();
   const parts = new Map<string, PartObjects>();
-  const through: ShaderMaterial = createScribeMaterial(light, { colour: 'chalk', width: 1.2, opacity: 0.3 });
+  const through: ShaderMaterial = createScribeMaterial(light, { colour: 'chalk', width: 1, opacity: 0.2 });
   through.depthFunc = GreaterDepth;
   const drop = (id: string): void => {
     const part = parts.get(id);

@@ -4,7 +4,7 @@ import { Matrix4, MOUSE, OrthographicCamera, PerspectiveCamera, TOUCH, Vector3 }
 import { OrbitControls } from 'three/addons/controls/OrbitControls.js';
 import type { Frame } from './frame';
 import type { Triple } from './vectors';
-import { eyeDistance, eyeOf, FIELD_OF_VIEW, mixViews, pictureAxes, type FreeArea, type View } from './view';
+import { eyeDistance, eyeOf, FIELD_OF_VIEW, mixViews, pannedView, pictureAxes, type FreeArea, type View } from './view';
 
 const FLIGHT_MS = 480;
 /** At the end of a flight to a square-on look, perspective is all but gone. */
@@ -175,11 +175,7 @@ export function createRig({ element, calm, onMove, onTaken }: RigOptions, first:
       take({ ...view, around: view.around + around, above: Math.max(-85, Math.min(89, view.above + above)) });
     },
     pan: (right, up) => {
-      const axes = pictureAxes(view);
-      const mm = view.span / area.height;
-      const at = new Vector3(...view.target);
-      at.addScaledVector(new Vector3(...axes.right), right * mm).addScaledVector(new Vector3(...axes.up), up * mm);
-      take({ ...view, target: at.toArray() });
+      take(pannedView(view, right, up, area.height));
     },
     zoom: (factor) => take({ ...view, span: Math.max(20, Math.min(30_000, view.span * factor)) }),
     resize: (next) => {

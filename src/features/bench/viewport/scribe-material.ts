@@ -3,6 +3,7 @@
 import {
   Color,
   Float32BufferAttribute,
+  InstancedBufferAttribute,
   InstancedBufferGeometry,
   InstancedInterleavedBuffer,
   InterleavedBufferAttribute,
@@ -17,12 +18,14 @@ const VERTEX = /* glsl */ `
   attribute vec3 to;
   attribute vec3 beside;
   attribute vec3 opposite;
+  attribute float extent;
   uniform vec2 screen;
   uniform float density;
   uniform float width;
   uniform float pull;
   varying vec3 vWorld;
   varying float vAway;
+  varying float vFade;
   void main() {
     vec4 a = modelViewMatrix * vec4(from, 1.0);
     vec4 b = modelViewMatrix * vec4(to, 1.0);
@@ -47,6 +50,10 @@ const VERTEX = /* glsl */ `
     along = size > 1e-6 ? along / size : vec2(1.0, 0.0);
     vec2 across = vec2(along.y, -along.x);
     vec4 clip = position.y < 0.5 ? clipA : clipB;
+    // what is only some pixels large would be nothing but lines
+    float px = extent * projectionMatrix[1][1] * 0.5 * screen.y / clip.w / density;
+    vFade = smoothstep(5.0, 30.0, px);
+    if (vFade < 0.02) isHidden = true;
     // a little longer at both ends, so that corners close
     vec2 offset = across * position.x + along * (position.y < 0.5 ? -0.5 : 0.5) * 0.8;
     clip.xy += offset * 2.0 * width * density / screen * clip.w;
@@ -67,10 +74,11 @@ const FRAGMENT = /* glsl */ `
   uniform vec2 recede;
   varying vec3 vWorld;
   varying float vAway;
+  varying float vFade;
   void main() {
     if (isCut && dot(cut.xyz, vWorld) > cut.w) discard;
     float away = smoothstep(recede.x, recede.y, vAway);
-    gl_FragColor = vec4(mix(colour, dye, away * 0.5), opacity);
+    gl_FragColor = vec4(mix(colour, dye, away * 0.5), opacity * vFade);
     #include <colorspace_fragment>
   }
 `;
@@ -123,6 +131,7 @@ export function scribeGeometry(scribe: Scribe): InstancedBufferGeometry {
   geometry.setAttribute('to', new InterleavedBufferAttribute(ends, 3, 3));
   geometry.setAttribute('beside', new InterleavedBufferAttribute(beside, 3, 0));
   geometry.setAttribute('opposite', new InterleavedBufferAttribute(beside, 3, 3));
+  geometry.setAttribute('extent', new InstancedBufferAttribute(scribe.extents, 1));
   geometry.instanceCount = scribe.ends.length / 6;
   return geometry;
 }

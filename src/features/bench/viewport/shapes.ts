@@ -72,7 +72,8 @@ function boxScribe(half: Triple, centre: Triple): Scribe {
       }
     }
   }
-  return { ends: Float32Array.from(ends), normals: new Float32Array(ends.length) };
+  const extents = new Float32Array(ends.length / 6).fill(2 * Math.max(...half));
+  return { ends: Float32Array.from(ends), normals: new Float32Array(ends.length), extents };
 }
 
 /** Enough facets that none is seen, whatever the size. */
@@ -120,7 +121,11 @@ export function drawnCylinder(radius: number, length: number): Drawn {
   }
   return {
     surface: surfaceOf(positions, normals, index),
-    scribe: { ends: Float32Array.from(ends), normals: Float32Array.from(beside) },
+    scribe: {
+      ends: Float32Array.from(ends),
+      normals: Float32Array.from(beside),
+      extents: new Float32Array(ends.length / 6).fill(Math.max(2 * radius, length)),
+    },
     closed: true,
   };
 }
@@ -139,6 +144,7 @@ export function mergeDrawn(parts: readonly { readonly drawn: Drawn; readonly pos
   const index = new Uint32Array(total((d) => d.surface.index.length));
   const ends = new Float32Array(total((d) => d.scribe.ends.length));
   const beside = new Float32Array(ends.length);
+  const extents = new Float32Array(ends.length / 6);
   let corner = 0;
   let triangle = 0;
   let line = 0;
@@ -149,13 +155,14 @@ export function mergeDrawn(parts: readonly { readonly drawn: Drawn; readonly pos
     for (let i = 0; i < surface.index.length; i += 1) index[triangle + i] = surface.index[i]! + corner / 3;
     place(scribe.ends, pose, 1, ends, line);
     place(scribe.normals, pose, 0, beside, line);
+    extents.set(scribe.extents, line / 6);
     corner += surface.positions.length;
     triangle += surface.index.length;
     line += scribe.ends.length;
   }
   return {
     surface: { positions, normals, index },
-    scribe: { ends, normals: beside },
+    scribe: { ends, normals: beside, extents },
     closed: parts.every((p) => p.drawn.closed),
   };
 }

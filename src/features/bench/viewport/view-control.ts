@@ -15,6 +15,8 @@ export interface CameraHand {
   readonly turn: (around: number, above: number) => void;
   /** CSS px. */
   readonly pan: (right: number, up: number) => void;
+  /** As pan, in a short flight. */
+  readonly glide: (right: number, up: number) => void;
   readonly zoom: (factor: number) => void;
   /** While a handle is dragged, the camera stays. */
   readonly hold: (held: boolean) => void;

@@ -72,6 +72,13 @@ export function fitView(
   return { ...from, target: middle, span: span * nearer };
 }
 
+/** The look with the sheet shifted by CSS px of a picture that is `height` px high; the scene goes the other way. */
+export function pannedView(view: View, right: number, up: number, height: number): View {
+  const axes = pictureAxes(view);
+  const mm = view.span / height;
+  return { ...view, target: add(view.target, add(scale(axes.right, right * mm), scale(axes.up, up * mm))) };
+}
+
 /** The short way round from one angle to another. */
 const turnBetween = (a: number, b: number, t: number): number => a + (((b - a + 540) % 360) - 180) * t;
 
