@@ -28,7 +28,9 @@ export function NarrowBench() {
             onClick={() => toggle('ladder')}
           >
             <b>Gaps</b>
-            <VerdictTotals totals={{ ...totalsOf(findings), seated: 0, clears: 0 }} />
+            <VerdictTotals
+              totals={{ ...totalsOf(findings), seated: 0, clears: 0, ...(main === null ? {} : { loose: 0 }) }}
+            />
           </button>
           {main !== null && (
             <button

@@ -7,7 +7,7 @@ import { useElementSize } from '../use-element-size';
 import { QuietLine } from './quiet-line';
 import { RungLabel } from './rung-label';
 import { LABEL_HEIGHT, labelForm, type LabelForm } from './label-form';
-import { isJoint, pairRungs, type Rung } from './rungs';
+import { isJoint, labelledOf, pairRungs, type Rung } from './rungs';
 import { spreadLabels } from './spread';
 import { RULE_WIDTH, SteelRule } from './steel-rule';
 import { useLadder } from './use-ladder';
@@ -58,13 +58,12 @@ function Rungs({ width, height }: RungsProps) {
     [heightOf, height],
   );
   const { ladder, span } = useLadder(all, fits);
-  // the worst have the first claim to a label
   const rungs = ladder.rungs;
-  const most = countFitting(rungs.map(heightOf), height);
   const list = useRef<HTMLUListElement>(null);
   const perMm = height / (span.top - span.bottom);
   const y = (mm: number): number => (span.top - Math.max(span.bottom, Math.min(span.top, mm))) * perMm;
-  const labelled = rungs.slice(0, most).reverse();
+  const labelled = labelledOf(rungs, heightOf, height).reverse();
+  const unlabelled = rungs.filter((r) => !labelled.includes(r));
   const heights = labelled.map(heightOf);
   const middles = spreadLabels(
     labelled.map((r, i) => ({ at: y(r.height), height: heights[i]! })),
@@ -78,16 +77,12 @@ function Rungs({ width, height }: RungsProps) {
   return (
     <>
       <div className="ladder-above">
-        <QuietLine ladder={ladder} span={span} unlabelled={rungs.length - labelled.length} />
+        <QuietLine ladder={ladder} span={span} unlabelled={unlabelled.length} />
       </div>
       <SteelRule span={span} height={height} display={display} />
       <svg className="ladder-leaders" width={width} height={height} aria-hidden="true">
-        <linearGradient id="zero-fade" gradientUnits="userSpaceOnUse" x1="0" x2={width} y1="0" y2="0">
-          <stop offset="0.2" stopColor="var(--chalk)" />
-          <stop offset="0.45" stopColor="var(--chalk)" stopOpacity="0.25" />
-        </linearGradient>
-        <path d={`M0 ${y(0)}H${width}`} className="ladder-zero" />
-        {rungs.slice(most).map((r) => (
+        <path d={`M0 ${y(0)}H${RULE_WIDTH + LEADER - 10}`} className="ladder-zero" />
+        {unlabelled.map((r) => (
           <path
             key={r.key}
             d={`M${RULE_WIDTH - 6} ${y(r.height)}h10`}
@@ -138,10 +133,4 @@ function Rungs({ width, height }: RungsProps) {
       </ul>
     </>
   );
-}
-
-function countFitting(heights: readonly number[], room: number): number {
-  let sum = 0;
-  const first = heights.findIndex((h) => (sum += h) > room);
-  return first < 0 ? heights.length : first;
 }

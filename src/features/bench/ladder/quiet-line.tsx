@@ -20,12 +20,14 @@ export function QuietLine({ ladder, span, unlabelled }: QuietLineProps) {
     <button type="button" className="ladder-quiet" onClick={() => session.getState().set({ sheet: 'gaps' })}>
       {loose.length > 0 && <VerdictMark verdict="loose" count={loose.length} />}
       {seated.length > 0 && <VerdictMark verdict="seated" count={seated.length} />}
-      {above.length > 0 && (
+      {above.length + unlabelled > 0 && (
         <span>
-          {above.length} more with over {formatLength(span.top, display)} to spare
+          {[
+            ...(above.length > 0 ? [`${above.length} more with over ${formatLength(span.top, display)} to spare`] : []),
+            ...(unlabelled > 0 ? [`${unlabelled} unlabelled`] : []),
+          ].join('; ')}
         </span>
       )}
-      {unlabelled > 0 && <span>{unlabelled} on the rule without a label</span>}
     </button>
   );
 }

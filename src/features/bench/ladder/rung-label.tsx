@@ -18,13 +18,12 @@ interface RungLabelProps {
 
 export function RungLabel({ rung, scene, form, isOpen, isPinned, onOpen, onPoint }: RungLabelProps) {
   const { finding } = rung;
-  const names = pairName(scene, finding);
   return (
     <button
       type="button"
       className={classes('rung', `rung-${form}`, isOpen && 'rung-open')}
       style={{ height: LABEL_HEIGHT[form] }}
-      title={form === 'line' ? undefined : names}
+      title={form === 'line' ? undefined : pairName(scene, finding)}
       aria-expanded={isOpen}
       onClick={onOpen}
       onPointerEnter={() => onPoint(true)}
@@ -32,14 +31,10 @@ export function RungLabel({ rung, scene, form, isOpen, isPinned, onOpen, onPoint
       onFocus={() => onPoint(true)}
       onBlur={() => onPoint(false)}
     >
-      {form === 'pair' ? (
-        <span className="rung-names">
-          <span>{nameOf(scene, finding.between[0])}, </span>
-          <span>{nameOf(scene, finding.between[1])}</span>
-        </span>
-      ) : (
-        <span className="rung-name">{names}</span>
-      )}
+      <span className="rung-names">
+        <span>{nameOf(scene, finding.between[0])}, </span>
+        <span>{nameOf(scene, finding.between[1])}</span>
+      </span>
       <Reading finding={finding} form={form === 'pair' ? 'stacked' : form === 'dense' ? 'short' : 'line'} />
       {isPinned && (
         <span className="rung-deeper" role="img" aria-label="deeper than the rule shows">

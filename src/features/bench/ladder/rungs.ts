@@ -86,6 +86,18 @@ export function ladderOf(rungs: readonly Rung[], span: Span): Ladder {
   };
 }
 
+/** The rungs that get a label where not all can: what is worst by its verdict first; in the order in which they stand. */
+export function labelledOf(rungs: readonly Rung[], heightOf: (rung: Rung) => number, room: number): Rung[] {
+  const chosen = new Set<Rung>();
+  let used = 0;
+  for (const rung of [...rungs].sort((a, b) => worse(a.finding, b.finding))) {
+    used += heightOf(rung);
+    if (used > room) break;
+    chosen.add(rung);
+  }
+  return rungs.filter((r) => chosen.has(r));
+}
+
 export interface Tick {
   /** mm over the zero line. */
   readonly at: number;

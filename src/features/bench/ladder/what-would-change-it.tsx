@@ -1,8 +1,8 @@
 // "What would change it": the move in the shop's directions, tried on the bench before it is made.
 import { useEffect, useState } from 'react';
 import type { Finding } from '#shared/check';
-import { formatNeed } from '#shared/units';
 import { Button } from '../../../components/button';
+import { Length } from '../../../components/fraction';
 import { useBench, useFacts, useOpen } from '../bench-model';
 import { labelOf, shift } from '../edits';
 import { nameOf } from '../finding-words';
@@ -21,7 +21,12 @@ export function WhatWouldChangeIt({ finding }: { readonly finding: Finding }) {
   if (freeing === null) return null;
   const moved = movedBy(scene, freeing, finding.between);
   const group = scene.groups.find((g) => g.id === moved.group);
-  const way = freeing.moves.map((m) => `${formatNeed(m.distance, display)} ${m.direction}`).join(' and ');
+  const way = freeing.moves.map((m, i) => (
+    <b key={m.direction} className="whitespace-nowrap">
+      {i > 0 && <span className="font-normal">and </span>}
+      <Length mm={m.distance} display={display} options={{ denominator: 32, rounding: 'up' }} /> {m.direction}{' '}
+    </b>
+  ));
   const name = nameOf(scene, freeing.part);
   const edit = { label: labelOf('Move', scene, moved), edit: (s: typeof scene) => shift(s, moved, freeing.vector) };
   return (
@@ -29,11 +34,11 @@ export function WhatWouldChangeIt({ finding }: { readonly finding: Finding }) {
       <p>
         {freeing.verified ? (
           <>
-            <b>{name}</b> <b>{way}</b> frees this pair.
+            <b>{name}</b> {way} frees this pair.
           </>
         ) : (
           <>
-            Straight apart, <b>{name}</b> would have to go <b>{way}</b>.
+            Straight apart, <b>{name}</b> would have to go {way}.
           </>
         )}
         {group !== undefined && <> It takes its group along, {group.name}.</>}

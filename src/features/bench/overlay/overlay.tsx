@@ -48,10 +48,6 @@ export function Overlay() {
     const box = sceneBox(scene, meshes, selection.moving);
     if (box !== null) marks.push(...laserTicks(frame, box));
   }
-  if (measuredAxis !== null && selection.ids.length > 0) {
-    const datum = datumFor(scene, measuredAxis, datums[measuredAxis]);
-    marks.push(...measureLine(frame, datum, measuredAxis, zeroPoint(scene, moved), display));
-  }
   const witnesses = chooseWitnesses({
     findings,
     open,
@@ -61,6 +57,10 @@ export function Overlay() {
   });
   const card = document.querySelector('.tape')?.getBoundingClientRect();
   marks.push(...witnessMarks(frame, witnesses, display, room, card === undefined ? [] : [card]));
+  if (measuredAxis !== null && selection.ids.length > 0) {
+    const datum = datumFor(scene, measuredAxis, datums[measuredAxis]);
+    marks.push(...measureLine(frame, datum, measuredAxis, zeroPoint(scene, moved), display));
+  }
   const part = scene.components.find((c) => c.id === hovered);
   if (part !== undefined && !selection.moving.has(part.id)) {
     const box = componentBox(scene, part, meshes);

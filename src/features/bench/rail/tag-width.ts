@@ -1,7 +1,7 @@
 // A tag is as wide as its name set on two lines, so that many tags find room beside one another.
 import { plain, widthOf } from '../overlay/mark';
 
-const LEAST = 50;
+const LEAST = 34;
 const MOST = 118;
 
 /** Width of a name on at most two lines, px. */

@@ -5,6 +5,7 @@ import type { Span } from '#shared/check';
 import { worldPose, type Component, type Motion, type Scene } from '#shared/scene';
 import { composeRigid, rigidFromPose } from '#shared/units';
 import { displacementOf } from './bodies';
+import type { Scribe } from './drawn';
 import type { SharedLight } from './light';
 import type { MeshSource } from './mesh-source';
 import { ORDER } from './part-objects';
@@ -14,6 +15,8 @@ import { drawnSolid, mergeDrawn } from './shapes';
 
 /** Outlines drawn over a whole stroke. */
 const OUTLINES = 12;
+/** Share of its largest thing's size from which a thing's lines belong to the outline. */
+const LARGE = 0.4;
 
 export interface FanSpans {
   readonly hits: readonly Span[];
@@ -31,6 +34,15 @@ type Tone = 'plain' | 'tight' | 'hits';
 
 const isIn = (spans: readonly Span[], p: number): boolean =>
   spans.some(([from, to]) => p >= from - 0.5 / OUTLINES && p <= to + 0.5 / OUTLINES);
+
+/** The lines of what is large in a part: twelve outlines of every small thing would be a thicket. */
+function largeLines({ ends, normals, extents }: Scribe): Scribe {
+  const least = Math.max(...extents) * LARGE;
+  const kept = [...extents.keys()].filter((i) => extents[i]! >= least);
+  const pick = (from: Float32Array): Float32Array =>
+    Float32Array.from(kept.flatMap((i) => [...from.subarray(6 * i, 6 * i + 6)]));
+  return { ends: pick(ends), normals: pick(normals), extents: Float32Array.from(kept, (i) => extents[i]!) };
+}
 
 export function createFan(light: SharedLight): Fan {
   const root = new Group();
@@ -55,7 +67,7 @@ export function createFan(light: SharedLight): Fan {
         return drawn === null ? [] : [{ drawn, pose: rigidFromPose(solid.pose?.at, solid.pose?.turn) }];
       });
       if (parts.length === 0) return;
-      geometry = scribeGeometry(mergeDrawn(parts).scribe);
+      geometry = scribeGeometry(largeLines(mergeDrawn(parts).scribe));
       const frame = worldPose(scene, component);
       for (let i = 0; i <= OUTLINES; i += 1) {
         const p = i / OUTLINES;
