@@ -145,6 +145,13 @@ export const KEYS: readonly KeyDeed[] = [
     run: ({ session }) => session.getState().set({ showsLasers: !session.getState().showsLasers }),
   },
   {
+    keys: ['Shift+L'],
+    shown: 'Shift + L',
+    what: 'where the lasers are thrown',
+    section: 'Looking',
+    run: ({ session }) => session.getState().set({ sheet: 'lasers' }),
+  },
+  {
     keys: ['c'],
     shown: 'C',
     what: 'hang a cutaway, or take it down',

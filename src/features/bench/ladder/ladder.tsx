@@ -17,9 +17,14 @@ export function Ladder() {
       <header className="ladder-head">
         <h2 id="gaps-title">Gaps</h2>
         <CheckPhase />
-        <button type="button" className="button-text" onClick={() => session.getState().set({ sheet: 'gaps' })}>
-          as a list
-        </button>
+        <span className="ladder-deeds">
+          <button type="button" className="button-text" onClick={() => session.getState().set({ sheet: 'rules' })}>
+            gap rules
+          </button>
+          <button type="button" className="button-text" onClick={() => session.getState().set({ sheet: 'gaps' })}>
+            as a list
+          </button>
+        </span>
       </header>
       {findings.length === 0 ? (
         <p className="ladder-empty">

@@ -7,7 +7,19 @@ import { lengthRuns, plain, widthOf, type Mark } from './mark';
 
 const TICK = 7;
 
-export function measureLine(frame: Frame, datum: Datum, axis: Axis, at: Triple, display: LengthDisplay): Mark[] {
+export interface MeasureOptions {
+  readonly display: LengthDisplay;
+  /** Without its words, where a handle says them already. */
+  readonly isBare: boolean;
+}
+
+export function measureLine(
+  frame: Frame,
+  datum: Datum,
+  axis: Axis,
+  at: Triple,
+  { display, isBare }: MeasureOptions,
+): Mark[] {
   const foot = at.map((x, k) => (k === axis ? datumCoordinate(datum, axis, at) : x)) as unknown as Triple;
   const a = project(frame, foot);
   const b = project(frame, at);
@@ -34,7 +46,7 @@ export function measureLine(frame: Frame, datum: Datum, axis: Axis, at: Triple, 
   const width = widthOf(runs, 13, 600) + 16;
   const x = Math.max(8, Math.min(frame.width - width - 8, (a.x + b.x) / 2 - width / 2));
   const y = Math.max(8, Math.min(frame.height - 32, (a.y + b.y) / 2 + (Math.abs(uy) > 0.7 ? 12 : 14)));
-  return [
+  const line: Mark[] = [
     {
       kind: 'line',
       points: [
@@ -46,6 +58,10 @@ export function measureLine(frame: Frame, datum: Datum, axis: Axis, at: Triple, 
     },
     tick(a),
     tick(b),
+  ];
+  if (isBare) return line;
+  return [
+    ...line,
     { kind: 'plate', x, y, width, height: 24, ink: 'laser' },
     { kind: 'text', x: x + 8, y: y + 16.5, runs, size: 13, weight: 600, ink: 'scribe' },
   ];

@@ -1,6 +1,6 @@
 // What lies over the picture and moves with the camera: witness marks, the selected part's laser ticks, names, scale bar.
 import { useSyncExternalStore } from 'react';
-import { useBench, useFacts, useLive, useSession, useShown } from '../bench-model';
+import { useBench, useFacts, useLive, useOpen, useSession, useShown } from '../bench-model';
 import { componentBox, sceneBox } from '../viewport/extent';
 import { useInsets } from '../viewport/insets';
 import { useMeshVersion } from '../viewport/use-mesh-version';
@@ -29,6 +29,7 @@ export function Overlay() {
   const presence = useSession((s) => s.presence);
   const measuredAxis = useSession((s) => s.measuredAxis);
   const datums = useSession((s) => s.datums);
+  const isDragging = useOpen((o) => o.preview !== null);
   const selection = useSelection();
   const moved = useMoved();
   const insets = useInsets();
@@ -59,7 +60,7 @@ export function Overlay() {
   marks.push(...witnessMarks(frame, witnesses, display, room, card === undefined ? [] : [card]));
   if (measuredAxis !== null && selection.ids.length > 0) {
     const datum = datumFor(scene, measuredAxis, datums[measuredAxis]);
-    marks.push(...measureLine(frame, datum, measuredAxis, zeroPoint(scene, moved), display));
+    marks.push(...measureLine(frame, datum, measuredAxis, zeroPoint(scene, moved), { display, isBare: isDragging }));
   }
   const part = scene.components.find((c) => c.id === hovered);
   if (part !== undefined && !selection.moving.has(part.id)) {

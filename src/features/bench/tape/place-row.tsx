@@ -2,7 +2,7 @@
 import { inWords } from '../../../lib/part-words';
 import { IconButton } from '../../../components/icon-button';
 import { LengthField } from '../../../components/length-field';
-import { Menu, MenuItem, MenuLabel } from '../../../components/menu';
+import { Menu, MenuItem, MenuLabel, MenuRule } from '../../../components/menu';
 import { useFacts, useSession } from '../bench-model';
 import { sayStep } from '../steps';
 import { SIDES, type Axis, type Datum } from './datums';
@@ -43,7 +43,7 @@ export function PlaceRow({ axis, datums, datum, reading, step, disabled, onRead,
     >
       <span className="place-words">
         {place}{' '}
-        {datums.length > 1 ? (
+        {datums.length > 1 || !disabled ? (
           <Menu
             align="start"
             trigger={
@@ -58,6 +58,8 @@ export function PlaceRow({ axis, datums, datum, reading, step, disabled, onRead,
                 {inWords(d.name, words)}
               </MenuItem>
             ))}
+            <MenuRule />
+            <MenuItem onSelect={() => set({ sheet: 'lasers' })}>The lasers of this scene</MenuItem>
           </Menu>
         ) : (
           name

@@ -61,14 +61,20 @@ export function createRig({ element, calm, onMove, onTaken }: RigOptions, first:
   controls.zoomToCursor = true;
   controls.minDistance = 30;
   controls.maxDistance = 30_000;
+  let isInHand = false;
   controls.addEventListener('change', () => {
     if (flight === null) view = readView();
+    // a click that moves nothing leaves the standpoint as it is
+    if (isInHand && !view.isSquare) onTaken();
     onMove();
+  });
+  controls.addEventListener('end', () => {
+    isInHand = false;
   });
   controls.addEventListener('start', () => {
     controls.enableDamping = !calm();
     if (flight !== null) land();
-    if (!view.isSquare) onTaken();
+    isInHand = true;
   });
 
   /** The free area's middle lies beside the picture's. */

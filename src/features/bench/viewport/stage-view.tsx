@@ -47,7 +47,7 @@ export function StageView() {
         onMove: invalidate,
         onTaken: () => {
           isTaken = true;
-          session.getState().set({ standpoint: null });
+          if (session.getState().standpoint !== null) session.getState().set({ standpoint: null });
         },
       },
       viewFrom(session.getState().standpoint ?? 'bay', zone(), now.current.area),
