@@ -113,7 +113,7 @@ export function ticksOf(span: Span, display: LengthDisplay, perMm: number): Tick
   const ranks = isMm ? [1, 5, 10] : [MM_PER_INCH / 8, MM_PER_INCH / 4, MM_PER_INCH / 2];
   const ticks: Tick[] = [];
   for (let i = Math.ceil(span.bottom / step - 1e-9); i * step <= span.top + 1e-9; i += 1) {
-    const at = i * step;
+    const at = i * step + 0;
     const rank = ranks.filter((r) => Math.abs(at / r - Math.round(at / r)) < 1e-6).length;
     ticks.push({ at, rank: rank as Tick['rank'] });
   }

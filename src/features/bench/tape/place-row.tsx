@@ -80,7 +80,6 @@ export function PlaceRow({ axis, datums, datum, reading, step, disabled, onRead,
         look="measure"
         display={display}
         step={step}
-        signed="absolute"
         value={Math.abs(reading)}
         disabled={disabled}
         onCommit={(mm) => onRead(side * mm)}
