@@ -63,8 +63,12 @@ export function Bench({ actions, startFinding = null }: BenchProps) {
             <NoViewport why="missing" />
           )}
           {isEmpty && <EmptyBench />}
-          <StandpointBar />
-          <CutawayBar />
+          {canDraw && (
+            <>
+              <StandpointBar />
+              <CutawayBar />
+            </>
+          )}
           {isNarrow ? (
             <NarrowBench />
           ) : (

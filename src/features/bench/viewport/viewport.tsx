@@ -1,7 +1,8 @@
 // The scene, full-bleed, with the marks that lie over it.
 import { Canvas } from '@react-three/fiber';
-import { Component, type ReactNode } from 'react';
+import { Component, useState, type ReactNode } from 'react';
 import { Overlay } from '../overlay/overlay';
+import { NoViewport } from './no-viewport';
 import { StageView } from './stage-view';
 
 export interface ViewportProps {
@@ -11,13 +12,29 @@ export interface ViewportProps {
 }
 
 export function Viewport({ antialias = true, children }: ViewportProps) {
+  const [isLost, setLost] = useState(false);
   return (
     <div className="bench-viewport">
-      <Canvas frameloop="demand" flat dpr={[1, 2]} gl={{ antialias, powerPreference: 'high-performance' }}>
+      <Canvas
+        frameloop="demand"
+        flat
+        dpr={[1, 2]}
+        gl={{ antialias, powerPreference: 'high-performance' }}
+        onCreated={({ gl }) => {
+          gl.domElement.addEventListener('webglcontextlost', () => setLost(true));
+          gl.domElement.addEventListener('webglcontextrestored', () => setLost(false));
+        }}
+      >
         <StageView />
       </Canvas>
-      <Overlay />
-      {children}
+      {isLost ? (
+        <NoViewport why="lost" />
+      ) : (
+        <>
+          <Overlay />
+          {children}
+        </>
+      )}
     </div>
   );
 }
