@@ -1,6 +1,6 @@
 import { keepPreviousData, queryOptions } from '@tanstack/react-query';
 import type { z } from 'zod';
-import { listScenes } from '#shared/api';
+import { listScenes, readDocument } from '#shared/api';
 import { callApi } from '../api';
 
 type SceneListQuery = z.input<typeof listScenes.query>;
@@ -10,4 +10,13 @@ export const scenesQuery = (projectId: string, query: SceneListQuery) =>
     queryKey: ['project', projectId, 'scenes', query],
     queryFn: ({ signal }) => callApi(listScenes, { params: { projectId }, query, signal }),
     placeholderData: keepPreviousData,
+  });
+
+/** The document as a sitting starts from it. From then on it lives in the sitting's store, so it is never read again here. */
+export const documentQuery = (sceneId: string) =>
+  queryOptions({
+    queryKey: ['scene', sceneId, 'document'],
+    queryFn: ({ signal }) => callApi(readDocument, { params: { sceneId }, signal }),
+    staleTime: Infinity,
+    gcTime: 0,
   });
