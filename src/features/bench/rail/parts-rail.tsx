@@ -52,6 +52,7 @@ export function PartsRail() {
             key={cluster.key}
             cluster={cluster}
             dragged={drag?.id ?? null}
+            dropBefore={drag === null ? null : (order.filter((id) => id !== drag.id)[drag.place] ?? null)}
             shift={drag?.x ?? 0}
             handlers={handlers}
             onKeyMove={(id, by) => reorder(id, order.indexOf(id) + by)}
@@ -75,13 +76,15 @@ export function PartsRail() {
 interface RailClusterProps {
   readonly cluster: Cluster;
   readonly dragged: string | null;
+  /** The tag that a dragged one would be put before. */
+  readonly dropBefore: string | null;
   readonly shift: number;
   readonly handlers: ReturnType<typeof useTagDrag>['handlers'];
   readonly onKeyMove: (id: string, by: number) => void;
   readonly canEdit: boolean;
 }
 
-function RailCluster({ cluster, dragged, shift, handlers, onKeyMove, canEdit }: RailClusterProps) {
+function RailCluster({ cluster, dragged, dropBefore, shift, handlers, onKeyMove, canEdit }: RailClusterProps) {
   const bench = useBench();
   const worst = useWorstOf();
   const selection = useSelection();
@@ -99,6 +102,7 @@ function RailCluster({ cluster, dragged, shift, handlers, onKeyMove, canEdit }: 
         {cluster.parts.map((part) => (
           <li
             key={part.id}
+            data-drop={dropBefore === part.id || undefined}
             style={dragged === part.id ? { transform: `translateX(${shift}px)`, zIndex: 2 } : undefined}
             onKeyDown={(event) => {
               if (!canEdit || !event.altKey || (event.key !== 'ArrowLeft' && event.key !== 'ArrowRight')) return;
