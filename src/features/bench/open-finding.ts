@@ -1,7 +1,7 @@
 // Opening a finding: the motions go to where it is, the camera to its witness mark.
 import type { Finding } from '#shared/check';
 import type { Bench } from './bench-model';
-import { findingKey } from './finding-words';
+import { findingKey } from '../../lib/finding-words';
 import { motionKey } from './viewport/bodies';
 
 export function openFinding({ session, view }: Pick<Bench, 'session' | 'view'>, finding: Finding): void {

@@ -4,7 +4,7 @@ import { classes } from '../../components/classes';
 import { Fraction } from '../../components/fraction';
 import { VerdictMark } from '../../components/verdict-mark';
 import { useFacts } from './bench-model';
-import { readingOf } from './finding-words';
+import { readingOf } from '../../lib/finding-words';
 
 export interface ReadingProps {
   readonly finding: Finding;

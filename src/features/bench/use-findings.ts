@@ -2,7 +2,7 @@
 import { useMemo } from 'react';
 import { VERDICTS, type Finding, type Verdict } from '#shared/check';
 import { useLive, useSession } from './bench-model';
-import { findingKey } from './finding-words';
+import { findingKey } from '../../lib/finding-words';
 
 export function useOpenFinding(): Finding | null {
   const findings = useLive((live) => live.findings);

@@ -2,7 +2,7 @@
 import { useEffect, useRef } from 'react';
 import { notify } from '../../components/toast';
 import { useBench, useLive } from './bench-model';
-import { findingKey } from './finding-words';
+import { findingKey } from '../../lib/finding-words';
 import { openFinding } from './open-finding';
 
 export function useStartFinding(key: string | null): void {

@@ -3,7 +3,7 @@ import type { Triple } from '../viewport/vectors';
 import { pictureAxes } from '../viewport/view';
 import type { Bench } from '../bench-model';
 import { closeFinding, openFinding } from '../open-finding';
-import { findingKey } from '../finding-words';
+import { findingKey } from '../../../lib/finding-words';
 import { clamp, duplicate, nudge, partGroup, remove, sayRemoved, selectionNow, turnBy } from '../part-deeds';
 import { STANDPOINTS } from '../standpoints/standpoints';
 import { TURN_STEP } from '../steps';

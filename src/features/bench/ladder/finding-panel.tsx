@@ -8,11 +8,11 @@ import { Gap, Length } from '../../../components/fraction';
 import { IconButton } from '../../../components/icon-button';
 import { CrossMark } from '../../../components/pictograms';
 import { useBench, useFacts, useLive, useOpen } from '../bench-model';
-import { findingKey, motionName, pairName } from '../finding-words';
+import { findingKey, motionName, pairName } from '../../../lib/finding-words';
 import { closeFinding, openFinding } from '../open-finding';
 import { Reading } from '../reading';
-import { ruleWords } from '../rules/rule-words';
-import { spansOf } from '../viewport/spans';
+import { ruleWords } from '../../../lib/rule-words';
+import { spansOf } from '../../../lib/spans';
 import { StrokeStrip } from './stroke-strip';
 import { WhatWouldChangeIt } from './what-would-change-it';
 

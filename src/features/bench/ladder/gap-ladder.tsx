@@ -1,7 +1,7 @@
 // The gap ladder: every pair that matters on one steel rule, by how much more room it has than it needs.
 import { useCallback, useMemo, useRef } from 'react';
 import { useBench, useFacts, useLive, useOpen, useSession } from '../bench-model';
-import { pairName } from '../finding-words';
+import { pairName } from '../../../lib/finding-words';
 import { openFinding } from '../open-finding';
 import { useElementSize } from '../use-element-size';
 import { QuietLine } from './quiet-line';

@@ -5,7 +5,7 @@ import { Dialog } from '../../../components/dialog';
 import { CautionLine } from '../../../components/cautions';
 import { VerdictMark } from '../../../components/verdict-mark';
 import { useBench, useLive, useSession, useShown } from '../bench-model';
-import { findingKey, motionName, pairName } from '../finding-words';
+import { findingKey, motionName, pairName } from '../../../lib/finding-words';
 import { openFinding } from '../open-finding';
 import { Reading } from '../reading';
 import { totalsOf } from './totals';

@@ -2,7 +2,7 @@
 // where so much is wrong that only small labels find room.
 import type { Finding } from '#shared/check';
 import type { LengthDisplay } from '#shared/units';
-import { readingOf } from '../finding-words';
+import { readingOf } from '../../../lib/finding-words';
 import { lengthRuns, plain, widthOf } from '../overlay/mark';
 
 export type LabelForm = 'line' | 'pair' | 'dense';

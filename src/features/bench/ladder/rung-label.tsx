@@ -1,6 +1,6 @@
 import type { Scene } from '#shared/scene';
 import { classes } from '../../../components/classes';
-import { nameOf, pairName } from '../finding-words';
+import { nameOf, pairName } from '../../../lib/finding-words';
 import { Reading } from '../reading';
 import { LABEL_HEIGHT, type LabelForm } from './label-form';
 import type { Rung } from './rungs';

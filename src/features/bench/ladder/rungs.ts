@@ -1,7 +1,7 @@
 // The gap ladder as figures: which pairs stand on it, how high, and how the rule is divided.
 import { findingKey, VERDICTS, type Finding } from '#shared/check';
 import { MM_PER_INCH, type LengthDisplay } from '#shared/units';
-import { heightOf } from '../finding-words';
+import { heightOf } from '../../../lib/finding-words';
 
 export interface Rung {
   readonly key: string;

@@ -4,7 +4,7 @@ import type { Span } from '#shared/check';
 import type { Component, Motion } from '#shared/scene';
 import { formatPercent } from '#shared/units';
 import { useFacts, useSession } from '../bench-model';
-import { sayPosition, strokeEnds } from '../motion-words';
+import { sayPosition, strokeEnds } from '../../../lib/motion-words';
 import { motionKey } from '../viewport/bodies';
 
 export interface StrokeStripProps {

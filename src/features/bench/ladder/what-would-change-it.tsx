@@ -5,7 +5,7 @@ import { Button } from '../../../components/button';
 import { Length } from '../../../components/fraction';
 import { useBench, useFacts, useOpen } from '../bench-model';
 import { labelOf, shift } from '../edits';
-import { nameOf } from '../finding-words';
+import { nameOf } from '../../../lib/finding-words';
 import { freeingOf, movedBy, type Freeing } from './freeing';
 
 export function WhatWouldChangeIt({ finding }: { readonly finding: Finding }) {

@@ -1,7 +1,7 @@
 // Witness marks: where a finding is closest, with the line between the two points, its reading, mark and word.
 import type { Finding } from '#shared/check';
 import type { LengthDisplay } from '#shared/units';
-import { readingOf } from '../finding-words';
+import { readingOf } from '../../../lib/finding-words';
 import { project, type Frame } from '../viewport/frame';
 import { lengthRuns, plain, widthOf, type Mark, type TextRun } from './mark';
 import { placeLabels, type Rect, type Room } from './place-labels';

@@ -5,7 +5,7 @@ import { Button } from '../../../components/button';
 import { Dialog } from '../../../components/dialog';
 import { inWords } from '../../../lib/part-words';
 import { useBench, useFacts, useOpen, useSession } from '../bench-model';
-import { nameOf } from '../finding-words';
+import { nameOf } from '../../../lib/finding-words';
 import { useRollCall } from './use-roll-call';
 
 export function RollCallStrip() {

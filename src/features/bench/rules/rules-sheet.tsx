@@ -21,7 +21,7 @@ import { Select } from '../../../components/text-field';
 import { categoryLabel } from '../../../lib/part-words';
 import { useBench, useFacts, useOpen, useSession } from '../bench-model';
 import { checked } from '../edits';
-import { generalOrigin, originOf, sideWords } from './rule-words';
+import { generalOrigin, originOf, sideWords } from '../../../lib/rule-words';
 
 export function RulesSheet() {
   const { session } = useBench();

@@ -3,7 +3,7 @@ import { useState } from 'react';
 import type { Motion } from '#shared/scene';
 import { StrokeStrip } from '../ladder/stroke-strip';
 import { useLive, useOpen } from '../bench-model';
-import { spansOf } from '../viewport/spans';
+import { spansOf } from '../../../lib/spans';
 
 /** So many stand there at once; the rest on request. */
 const FIRST = 3;

@@ -5,7 +5,7 @@ import { useBench, useLive, useOpen, useSession, useShown } from '../bench-model
 import { StrokeStrip } from '../ladder/stroke-strip';
 import { useSelection } from '../use-selection';
 import { motionKey } from '../viewport/bodies';
-import { spansOf } from '../viewport/spans';
+import { spansOf } from '../../../lib/spans';
 import { MotionFields } from './motion-fields';
 
 export function MotionPanel() {

@@ -8,8 +8,8 @@ import { LengthField } from '../../../components/length-field';
 import { CrossMark } from '../../../components/pictograms';
 import { Select } from '../../../components/text-field';
 import { useBench, useFacts, useOpen } from '../bench-model';
-import { nameOf } from '../finding-words';
-import { originOf, sideWords } from '../rules/rule-words';
+import { nameOf } from '../../../lib/finding-words';
+import { originOf, sideWords } from '../../../lib/rule-words';
 import { useSelection } from '../use-selection';
 
 /** What the joint of two parts allows until somebody says otherwise, mm. */

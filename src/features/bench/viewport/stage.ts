@@ -13,7 +13,7 @@ import { createLight, setCut, throwLasers, type Cut, type SharedLight } from './
 import { lookOf } from './look';
 import type { MeshSource } from './mesh-source';
 import { createPartsLayer } from './parts-layer';
-import { spansOf } from './spans';
+import { spansOf } from '../../../lib/spans';
 import type { Box } from './vectors';
 
 export interface StageState {

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { freeingOf, movedBy } from '../../../../src/features/bench/ladder/freeing';
-import { joinSpans, spansOf } from '../../../../src/features/bench/viewport/spans';
+import { joinSpans, spansOf } from '../../../../src/lib/spans';
 import { clustersOf, movedTo, orderOf } from '../../../../src/features/bench/rail/clusters';
 import { finding, smallScene } from './support';
 

@@ -1,14 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import type { Motion } from '#shared/scene';
-import { heightOf, pairName, readingOf } from '../../../../src/features/bench/finding-words';
-import { sayPosition, stepAt, strokeEnds } from '../../../../src/features/bench/motion-words';
-import {
-  decidingRule,
-  generalOrigin,
-  originOf,
-  ruleWords,
-  sideWords,
-} from '../../../../src/features/bench/rules/rule-words';
+import { heightOf, pairName, readingOf } from '../../../../src/lib/finding-words';
+import { sayPosition, stepAt, strokeEnds } from '../../../../src/lib/motion-words';
+import { decidingRule, generalOrigin, originOf, ruleWords, sideWords } from '../../../../src/lib/rule-words';
 import { stepFor } from '../../../../src/features/bench/steps';
 import { sayRecord } from '../../../../src/features/bench/top-bar/conflict-words';
 import { finding, smallScene } from './support';

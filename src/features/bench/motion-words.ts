@@ -1,2 +1,0 @@
-// Where a motion stands, in words: as everywhere else.
-export { sayPosition, sayStepValue, stepAt, strokeEnds } from '../../lib/motion-words';

@@ -1,2 +1,0 @@
-// Where on its stroke a motion hits or is tight: as everywhere else.
-export { joinSpans, spansOf } from '../../../lib/spans';
