@@ -22,10 +22,19 @@ import type { MeshEntry } from './report';
 export interface LoadedMesh {
   readonly indexed: IndexedMesh;
   readonly sha256: string;
+  /** The mesh at so many mm per file unit; made once, as a live check prepares the same scene over and over. */
+  readonly shapeAt: (scale: number) => MeshShape;
 }
 
 export function loadedMesh(mesh: Mesh, sha256: string): LoadedMesh {
-  return { indexed: indexMesh(mesh), sha256 };
+  const indexed = indexMesh(mesh);
+  const shapes = new Map<number, MeshShape>();
+  const shapeAt = (scale: number): MeshShape => {
+    const made = shapes.get(scale) ?? meshShape(indexed, scale);
+    shapes.set(scale, made);
+    return made;
+  };
+  return { indexed, sha256, shapeAt };
 }
 
 export interface PreparedMotion {
@@ -50,7 +59,10 @@ export interface Prepared {
   readonly scene: Scene;
   readonly components: readonly PreparedComponent[];
   readonly meshes: readonly MeshEntry[];
-  /** Largest coordinate of anything at rest, mm: what rounding is measured against. */
+  /**
+   * What rounding is measured against, mm: no coordinate of anything at rest is larger. The next power of two, so that the
+   * figures of a pair do not hang on how far away some third part is moved.
+   */
   readonly largest: number;
 }
 
@@ -126,9 +138,8 @@ function eachBoxCorner(box: Float64Array, look: (x: number, y: number, z: number
   }
 }
 
-/** Builds shapes, each mesh once per scale. */
+/** Builds shapes and counts the triangles of all placed meshes. */
 class ShapeMaker {
-  private readonly scaled = new Map<string, MeshShape>();
   triangles = 0;
   constructor(private readonly meshes: ReadonlyMap<string, LoadedMesh>) {}
 
@@ -139,13 +150,7 @@ class ShapeMaker {
     const loaded = this.meshes.get(shape.mesh);
     if (loaded === undefined) return 'the mesh is missing';
     this.triangles += loaded.indexed.mesh.triangles.length / 3;
-    const key = `${shape.scale} ${shape.mesh}`;
-    let made = this.scaled.get(key);
-    if (made === undefined) {
-      made = meshShape(loaded.indexed, shape.scale);
-      this.scaled.set(key, made);
-    }
-    return made;
+    return loaded.shapeAt(shape.scale);
   }
 }
 
@@ -210,6 +215,12 @@ function meshEntries(scene: Scene, meshes: ReadonlyMap<string, LoadedMesh>): Mes
   });
 }
 
+function powerAbove(length: number): number {
+  let power = 1024;
+  while (power < length) power *= 2;
+  return power;
+}
+
 /**
  * Makes a scene ready for the engine.
  * @param meshes by the name that the document uses
@@ -225,7 +236,10 @@ export function prepareScene(scene: Scene, meshes: ReadonlyMap<string, LoadedMes
     components.push(result.made);
     largest = Math.max(largest, result.largest);
   }
-  return { ok: true, prepared: { scene, components, meshes: meshEntries(scene, meshes), largest } };
+  return {
+    ok: true,
+    prepared: { scene, components, meshes: meshEntries(scene, meshes), largest: powerAbove(largest) },
+  };
 }
 
 /** A side that stays: the chosen solids at rest. */

@@ -1,5 +1,4 @@
 // What the open scene offers to the screens. One store per open scene; the screens read slices of it and call its actions.
-import type { Finding, MeshEntry } from '#shared/check';
 import type { Scene } from '#shared/scene';
 
 /** Where the document stands against the server. */
@@ -45,15 +44,4 @@ export interface OpenScene {
   readonly settle: (choice: 'mine' | 'theirs') => void;
 }
 
-/** The live check of what is on the screen: a preview of the dry fit, never the record. */
-export interface LiveCheck {
-  readonly phase: 'reading-meshes' | 'checking' | 'done' | 'failed';
-  readonly done: number;
-  readonly total: number;
-  /** In the report's order; while a check runs, the old findings of pairs that are not touched stay. */
-  readonly findings: readonly Finding[];
-  readonly unchecked: readonly (readonly [string, string])[];
-  readonly meshes: readonly MeshEntry[];
-  /** A sentence for the person when the phase is `failed`. */
-  readonly problem: string | null;
-}
+export type { LiveCheck } from '../workers/live-check';

@@ -1,8 +1,9 @@
 import { keepPreviousData, queryOptions } from '@tanstack/react-query';
 import type { z } from 'zod';
-import { listScenes, readDocument } from '#shared/api';
+import { listScenes, readDocument, type openDocument } from '#shared/api';
 import { callApi } from '../api';
 
+export type ReadDocument = z.output<typeof openDocument>;
 type SceneListQuery = z.input<typeof listScenes.query>;
 
 export const scenesQuery = (projectId: string, query: SceneListQuery) =>
