@@ -2,7 +2,7 @@
 import { findingKey, type Finding } from '#shared/check';
 import { depthOf } from '#shared/review';
 import type { Component, Scene } from '#shared/scene';
-import { gapParts, lengthParts, type LengthDisplay, type LengthParts } from '#shared/units';
+import { formatPercent, gapParts, lengthParts, type LengthDisplay, type LengthParts } from '#shared/units';
 
 export { findingKey };
 
@@ -16,6 +16,14 @@ export const pairName = (scene: Scene, finding: Pick<Finding, 'between'>): strin
 export function motionName(scene: Scene, component: string, motion: string): string {
   const found: Component | undefined = scene.components.find((c) => c.id === component);
   return found?.motions.find((m) => m.id === motion)?.name ?? motion;
+}
+
+/** "at rest", "62 % of Brake stroke, 30 % of Clutch stroke". */
+export function whereWords(scene: Scene, finding: Finding): string {
+  if (finding.motions.length === 0) return 'at rest';
+  return finding.motions
+    .map((m, i) => `${formatPercent(finding.at.positions[i] ?? 0)} of ${motionName(scene, m.component, m.motion)}`)
+    .join(', ');
 }
 
 export interface Reading {

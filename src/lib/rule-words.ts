@@ -50,3 +50,14 @@ export function ruleWords(scene: Scene, finding: Finding): string {
   const rule = decidingRule(scene, finding);
   return rule === null ? 'a rule of this scene' : originOf(rule);
 }
+
+/** The row of the table that decided a finding, as a person would read it out: "any pedal to any steering column". */
+export function ruleName(scene: Scene, finding: Finding, words: WordChoice): string {
+  if (finding.rule === 'joint') return 'joint';
+  if (finding.rule === 'movingGap') return 'the general gap of moving parts';
+  if (finding.rule === 'gap') return 'the general gap of fixed parts';
+  const rule = decidingRule(scene, finding);
+  if (rule === null) return 'a rule of this scene';
+  const [a, b] = rule.between.map((side) => sideWords(scene, side, words));
+  return `${a} to ${b}`;
+}

@@ -1,5 +1,5 @@
 import { queryOptions } from '@tanstack/react-query';
-import { listDryFits, readRevision, type DryFit } from '#shared/api';
+import { listDryFits, readDocument, readRevision, type DryFit } from '#shared/api';
 import { callApi } from '../api';
 
 export const isUnderWay = ({ state }: Pick<DryFit, 'state'>): boolean => state === 'queued' || state === 'running';
@@ -25,4 +25,12 @@ export const revisionQuery = (revisionId: string) =>
       const dryFit = state.data?.dryFit ?? null;
       return dryFit !== null && isUnderWay(dryFit) ? BEAT : false;
     },
+  });
+
+/** The scene as it is kept just now, for those who only look: the bench reads it in its own way. */
+export const keptSceneQuery = (sceneId: string) =>
+  queryOptions({
+    queryKey: ['scene', sceneId, 'kept'],
+    queryFn: ({ signal }) => callApi(readDocument, { params: { sceneId }, signal }),
+    staleTime: 0,
   });

@@ -1,17 +1,11 @@
 // What is drawn over the scene, as plain figures in CSS px: one list, set in SVG on the screen and painted on a canvas in a
 // picture, so that both show the same.
-import type { LengthParts } from '#shared/units';
+import type { TextRun } from '../../../lib/text-runs';
+
+export { lengthRuns, plain, type TextRun } from '../../../lib/text-runs';
 
 export type Ink =
   'hits' | 'tight' | 'loose' | 'seated' | 'clears' | 'laser' | 'scribe' | 'scribe-soft' | 'chalk' | 'dye-deep';
-
-export interface TextRun {
-  readonly text: string;
-  /** Share of the mark's size. */
-  readonly size: number;
-  /** Raised by this share of the mark's size; negative: lowered. */
-  readonly raise: number;
-}
 
 export type Mark =
   | {
@@ -54,24 +48,6 @@ export type Mark =
       readonly weight: 400 | 600 | 700;
       readonly ink: Ink;
     };
-
-export const plain = (text: string): TextRun[] => [{ text, size: 1, raise: 0 }];
-
-/** A length as it is set in print: a real fraction, the unit after it. */
-export function lengthRuns(parts: LengthParts): TextRun[] {
-  const runs: TextRun[] = [];
-  const whole = `${parts.sign === '-' ? '\u2212' : ''}${parts.whole}`;
-  if (whole !== '') runs.push({ text: whole, size: 1, raise: 0 });
-  if (parts.numerator !== 0) {
-    runs.push(
-      { text: String(parts.numerator), size: 0.72, raise: 0.3 },
-      { text: '\u2044', size: 0.95, raise: 0.02 },
-      { text: String(parts.denominator), size: 0.72, raise: -0.1 },
-    );
-  }
-  runs.push(parts.unit === 'mm' ? { text: '\u00a0mm', size: 0.8, raise: 0 } : { text: '"', size: 1, raise: 0 });
-  return runs;
-}
 
 let pen: CanvasRenderingContext2D | null = null;
 const widths = new Map<string, number>();
