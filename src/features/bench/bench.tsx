@@ -20,6 +20,7 @@ import { ConflictDialog } from './top-bar/conflict-dialog';
 import { TopBar } from './top-bar/top-bar';
 import { useIsNarrow } from './use-is-narrow';
 import { useStartFinding } from './use-start-finding';
+import { useWantedMeshes } from './use-wanted-meshes';
 import { InsetsContext, type Insets } from './viewport/insets';
 import { NoViewport } from './viewport/no-viewport';
 import { Viewport, ViewportBoundary } from './viewport/viewport';
@@ -46,6 +47,7 @@ export function Bench({ actions, startFinding = null }: BenchProps) {
   const canDraw = useMemo(() => hasWebGl2(), []);
   const isEmpty = useOpen((o) => o.scene.components.length === 0);
   useKeys();
+  useWantedMeshes();
   useStartFinding(startFinding);
   return (
     <InsetsContext value={isNarrow ? NARROW : WIDE}>

@@ -59,7 +59,7 @@ export function createStaticScene({ scene, findings, loadMesh, say, standpoint =
 }
 
 /** Meshes that the scene draws. */
-export function meshNamesOf(scene: Scene): readonly string[] {
+export function meshNamesOf(scene: Pick<Scene, 'components'>): readonly string[] {
   const names = scene.components.flatMap((c) =>
     c.solids.flatMap((s) => (s.shape.kind === 'mesh' ? [s.shape.mesh] : [])),
   );
