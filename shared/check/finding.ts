@@ -74,13 +74,12 @@ function positionsToTry(at: Gap, a: Side, b: Side, spans: readonly Span[] | null
   const movesA = a.path.steps.length > 0;
   const movesB = b.path.steps.length > 0;
   if (movesA && movesB) {
-    for (const s of [0, 0.25, 0.5, 0.75, 1]) for (const t of [0, 0.25, 0.5, 0.75, 1]) tries.push([s, t]);
+    for (const s of [0, 0.5, 1]) for (const t of [0, 0.5, 1]) tries.push([s, t]);
   } else {
     for (const [from, to] of spans ?? []) {
-      for (const share of [0.5, 0, 1, 0.25, 0.75]) {
-        const p = from + share * (to - from);
-        tries.push(movesA ? [p, 0] : [0, p]);
-      }
+      // where a hit begins or ends within the stroke there is hardly any overlap
+      const ends = [from, to].filter((p) => p === 0 || p === 1);
+      for (const p of [from + (to - from) / 2, ...ends]) tries.push(movesA ? [p, 0] : [0, p]);
     }
   }
   return tries;

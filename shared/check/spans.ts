@@ -1,7 +1,8 @@
-// The stretches of one motion in which the gap is below a limit. A stretch is searched as a whole: proven clear, it is
-// done; otherwise it is halved until what is left is shorter than half the accuracy of travel. So no hit hides between
-// samples, and the ends are good to the accuracy.
+// The stretches of one motion in which the gap is below a limit. A stretch is searched as a whole: proven clear, or proven
+// to overlap all along, it is done; otherwise it is halved until what is left is shorter than the accuracy of travel. So no
+// hit hides between samples, and the ends are good to the accuracy.
 import {
+  displacementAt,
   roundingOf,
   stepTravel,
   type GapMeter,
@@ -11,7 +12,11 @@ import {
 } from '#shared/geometry';
 import { shapeBox } from '#shared/geometry';
 import { applyRigid, composeRigid } from '#shared/units';
+import { overlapAtLeast } from './deep';
 import type { Span } from './report';
+
+/** Stretches of this share of the accuracy are not halved any more. */
+const LEAF = 0.9;
 
 export interface SpanQuestion {
   readonly meter: GapMeter;
@@ -83,12 +88,38 @@ export function spansBelow(q: SpanQuestion): Span[] {
     }
     return sum;
   };
+  const other = q.moving === 'a' ? q.b : q.a;
+  /** Whether the gap in the middle, or the depth of an overlap there, outlasts all that moves on the way to either end. */
+  const isBelowAllAlong = (middle: number, reaches: number): boolean => {
+    const spare = q.limit - reaches;
+    if (spare > 0) {
+      const here = { from: middle, to: middle };
+      const near = q.meter.measure(
+        q.a,
+        q.b,
+        (lower, upper) => upper < spare || lower >= spare,
+        q.moving === 'a' ? here : rest,
+        q.moving === 'b' ? here : rest,
+        spare,
+      );
+      return near.upper < spare;
+    }
+    const move = displacementAt(side.path, middle);
+    const placed = side.solids.map((s) => ({ shape: s.shape, pose: composeRigid(move, s.pose) }));
+    return overlapAtLeast(placed, other.solids, -spare) > -spare;
+  };
   const clearFrom = q.limit - q.slack + roundingOf(q.largest);
   const spans: [number, number][] = [];
   const lone: number[] = [];
   const rest = { from: 0, to: 1 };
 
+  const take = (from: number, to: number, position: number): void => {
+    const before = spans.length;
+    addSpan(spans, from, to, travelBetween, q.accuracy);
+    if (spans.length > before) lone.push(position);
+  };
   const visit = (from: number, to: number): void => {
+    const middle = from + (to - from) / 2;
     const range = { from, to };
     const near = q.meter.measure(
       q.a,
@@ -100,14 +131,14 @@ export function spansBelow(q: SpanQuestion): Span[] {
     );
     if (near.upper >= q.limit) return;
     const travel = travelBetween(from, to);
-    const middle = from + (to - from) / 2;
     const position = near.positions[q.moving === 'a' ? 0 : 1];
-    const reaches = Math.max(travelBetween(from, position), travelBetween(position, to));
-    const throughout = near.contained || near.upper + reaches < q.limit;
-    if (throughout || travel <= q.accuracy / 2 || middle <= from || middle >= to) {
-      const before = spans.length;
-      addSpan(spans, from, to, travelBetween, q.accuracy);
-      if (spans.length > before) lone.push(position);
+    const reaches = Math.max(travelBetween(from, middle), travelBetween(middle, to));
+    if (near.containedThroughout || isBelowAllAlong(middle, reaches)) {
+      take(from, to, position);
+      return;
+    }
+    if (travel <= LEAF * q.accuracy || middle <= from || middle >= to) {
+      take(from, to, position);
       return;
     }
     visit(from, middle);

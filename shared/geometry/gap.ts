@@ -1,6 +1,6 @@
 // The gap between two sides over ranges of their paths: the least distance of their surfaces, or nothing where one lies
 // inside the other.
-import { composeRigid } from '#shared/units';
+import { composeRigid, type Rigid } from '#shared/units';
 import { containedPoint } from './contain';
 import { displacementAt } from './path';
 import type { Triple } from './path';
@@ -8,8 +8,10 @@ import { Searcher } from './search';
 import type { Nearest, Range, Settled, Side } from './search';
 
 export interface Gap extends Nearest {
-  /** True if a part lies wholly inside another at `positions`, and so all along: their surfaces never meet. */
+  /** True if a part lies wholly inside another at `positions`. */
   readonly contained: boolean;
+  /** True if it is so over the whole of the ranges. */
+  readonly containedThroughout: boolean;
 }
 
 /** Distances below this are written as contact, mm. */
@@ -24,15 +26,24 @@ export function roundingOf(largestCoordinate: number): number {
 }
 
 function findContained(A: Side, B: Side, positions: readonly [number, number]): Pick<Gap, 'points' | 'solids'> | null {
-  const moveA = displacementAt(A.path, positions[0]);
-  const moveB = displacementAt(B.path, positions[1]);
+  // boxes and cylinders are compared as solids by the search itself
+  const meshesOfA = A.solids.some((s) => s.shape.kind === 'mesh');
+  if (!meshesOfA && !B.solids.some((s) => s.shape.kind === 'mesh')) return null;
+  const posesA = posesAt(A, positions[0]);
+  const posesB = posesAt(B, positions[1]);
   for (const [i, a] of A.solids.entries()) {
     for (const [j, b] of B.solids.entries()) {
-      const point: Triple | null = containedPoint(a, composeRigid(moveA, a.pose), b, composeRigid(moveB, b.pose));
+      const point: Triple | null = containedPoint(a, posesA[i]!, b, posesB[j]!);
       if (point !== null) return { points: [point, point], solids: [i, j] };
     }
   }
   return null;
+}
+
+function posesAt({ solids, path }: Side, position: number): Rigid[] {
+  if (path.steps.length === 0) return solids.map((s) => s.pose);
+  const move = displacementAt(path, position);
+  return solids.map((s) => composeRigid(move, s.pose));
 }
 
 /** Measures gaps; keep one and use it again. */
@@ -52,12 +63,12 @@ export class GapMeter {
     const positions: readonly [number, number] =
       near.lower > 0 ? [rangeA?.from ?? 0, rangeB?.from ?? 0] : near.positions;
     const inside = findContained(A, B, positions);
-    if (inside === null) return { ...near, contained: false };
-    return { upper: 0, lower: 0, positions, ...inside, contained: true };
+    if (inside === null) return { ...near, contained: false, containedThroughout: false };
+    return { upper: 0, lower: 0, positions, ...inside, contained: true, containedThroughout: near.lower > 0 };
   }
 }
 
 /** Contact, as one point of both. */
 function touching(near: Nearest, point: Triple): Gap {
-  return { ...near, upper: 0, lower: 0, points: [point, point], contained: false };
+  return { ...near, upper: 0, lower: 0, points: [point, point], contained: false, containedThroughout: false };
 }
