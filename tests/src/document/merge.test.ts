@@ -75,9 +75,10 @@ describe('a merge', () => {
     expect(xOf(found.mine, 'c')).toBe(40);
     expect(found.mine.rules.pairs).toContainEqual(ruled.rules.pairs.at(-1));
     expect(canonicalSceneText(found.theirs)).toBe(canonicalSceneText(deleted));
-    const other = asConflict(merge(base, deleted, ruled));
+    const other = asConflict(merge(base, move('a', 1)(deleted), ruled));
+    expect([xOf(other.mine, 'a'), xOf(other.theirs, 'a')]).toEqual([1, 1]);
     expect(xOf(other.mine, 'c')).toBeUndefined();
-    expect(canonicalSceneText(other.theirs)).toBe(canonicalSceneText(ruled));
+    expect(canonicalSceneText(other.theirs)).toBe(canonicalSceneText(move('a', 1)(ruled)));
   });
 
   it('leaves a part where it stands in the car when the group around it was taken apart', () => {

@@ -362,6 +362,20 @@ describe('drafts', () => {
     expect(state(next).save.kind).toBe('conflict');
   });
 
+  it('are kept, with the save they belong to, before it is sent', async () => {
+    const server = new FakeServer(row());
+    const drawer = new Drawer();
+    const quick = drawer.put;
+    drawer.put = async (draft) => {
+      await new Promise((resolve) => setTimeout(resolve, 300));
+      await quick(draft);
+    };
+    put(await sit(server, drawer), 'a', 1);
+    while (server.requests.length === 0) await wait(10);
+    const [draft] = await drawer.all();
+    expect(draft?.pending?.saveId).toBe(server.requests[0]!.saveId);
+  });
+
   it('that cannot be kept do not hinder saving', async () => {
     const server = new FakeServer(row());
     const drawer = new Drawer();
@@ -412,7 +426,7 @@ describe('two tabs', () => {
         const drawers = [new Drawer(), new Drawer()];
         const tabs = [await sit(server, drawers[0]), await sit(server, drawers[1])];
         for (const { tab, change, weather, wait: ms } of turns) {
-          server.weather = weather as FakeServer['weather'];
+          server.weather = weather;
           state(tabs[tab]!).apply({ label: 'Edit', edit: change });
           await wait(ms);
         }
