@@ -11,6 +11,8 @@ const KINDS = {
   mailTo: { points: 10, seconds: 60 * 60 },
   /** Uploads by one person. */
   upload: { points: 120, seconds: 60 * 60 },
+  /** Pictures by one person: a dry fit brings up to two dozen at once. */
+  picture: { points: 600, seconds: 60 * 60 },
   /** Public share reads from one address. */
   share: { points: 600, seconds: 60 },
 } as const;

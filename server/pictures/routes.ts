@@ -27,7 +27,7 @@ export function pictureRoutes(router: Router, services: Services): void {
       const incoming = incomingOf(req);
       if (incoming === null) throw new ApiError('mesh/no-file');
       try {
-        await limits.use('upload', person.id);
+        await limits.use('picture', person.id);
         const bytes = await readFile(incoming.file);
         const size = pngSize(bytes);
         if (size === null) throw new ApiError('picture/refused');

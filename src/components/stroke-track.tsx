@@ -3,6 +3,7 @@ import type { Span } from '#shared/check';
 import type { Motion } from '#shared/scene';
 import { formatPercent } from '#shared/units';
 import { strokeEnds } from '../lib/motion-words';
+import './stroke-track.css';
 
 export interface StrokeTrackProps {
   readonly motion: Motion;
