@@ -2,15 +2,19 @@ import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { useMemo, type ReactNode } from 'react';
 import { useParams, useSearchParams } from 'react-router-dom';
 import { useStore } from 'zustand';
+import { mayShow } from '#shared/access';
 import type { Project } from '#shared/api';
 import { loadScene, type Scene } from '#shared/scene';
 import { ButtonLink } from '../components/button';
 import { ErrorState, LoadingState } from '../components/states';
 import { useOpenBench, type OpenBench, type SittingPlace } from '../document/hooks';
 import { Bench } from '../features/bench/bench';
-import { BenchContext, FactsContext } from '../features/bench/bench-model';
+import { BenchContext, FactsContext, type Bench as BenchValue, type BenchFacts } from '../features/bench/bench-model';
 import { newBench } from '../features/bench/new-bench';
+import { captureNamed } from '../features/bench/scene-view/capture-named';
 import { useBenchFacts } from '../features/bench/use-bench-facts';
+import { DryFitButton } from '../features/dry-fits/dry-fit-button';
+import { PictureButton } from '../features/shares/picture-button';
 import { tell, type Told } from '../lib/api-problem';
 import { useMe } from '../lib/me';
 import { projectQuery } from '../lib/queries/projects';
@@ -80,9 +84,50 @@ function OpenedBench({ opened, project }: { readonly opened: OpenBench; readonly
   return (
     <BenchContext value={bench}>
       <FactsContext value={facts}>
-        <Bench startFinding={search.get('finding')} />
+        <Bench
+          startFinding={search.get('finding')}
+          actions={<Actions bench={bench} facts={facts} opened={opened} project={project} />}
+        />
       </FactsContext>
     </BenchContext>
+  );
+}
+
+interface ActionsProps {
+  readonly bench: BenchValue;
+  readonly facts: BenchFacts;
+  readonly opened: OpenBench;
+  readonly project: Project;
+}
+
+/** What the head of the bench offers for the scene as a whole. */
+function Actions({ bench, facts, opened, project }: ActionsProps) {
+  const { open, live, saveNow } = opened;
+  const sceneId = useStore(open, (o) => o.sceneId);
+  const saveNumber = useStore(open, (o) => o.save.saveNumber);
+  const dryFit = (
+    <DryFitButton
+      sceneId={sceneId}
+      saveNumber={saveNumber}
+      saveNow={saveNow}
+      canRun={mayShow(project.role, 'dry-fit.run')}
+    />
+  );
+  return (
+    <>
+      <PictureButton
+        canTake={mayShow(project.role, 'picture.take')}
+        sceneId={sceneId}
+        projectId={project.id}
+        projectName={project.name}
+        display={facts.display}
+        saveNow={saveNow}
+        capture={() => captureNamed(bench.view, facts.words)}
+        now={() => ({ scene: open.getState().scene, findings: live.getState().findings })}
+        dryFit={dryFit}
+      />
+      {dryFit}
+    </>
   );
 }
 
