@@ -44,11 +44,16 @@ export class Autosave {
   private latest: number;
   private isReading = false;
   private underWay: Promise<void> | null = null;
+  /** The save id of the save to come, in its draft from the first edit on: a page that goes away has no time to write again. */
+  private nextId: string | null = null;
+  /** A save of an earlier sitting may have held more than its draft: before anything is built on it, it is read. */
+  private isUnsure: boolean;
 
   constructor(private readonly parts: AutosaveParts) {
     this.server = parts.server;
     this.pending = parts.pending;
     this.latest = parts.server.saveNumber;
+    this.isUnsure = parts.pending !== null;
   }
 
   /** The document changed here. */
@@ -112,6 +117,7 @@ export class Autosave {
   /** A newer document of the server: puts mine on top of it, or asks. */
   takeIn(document: ServerDocument): void {
     this.latest = Math.max(this.latest, document.saveNumber);
+    this.isUnsure = false;
     const { host } = this.parts;
     const merged = merge(this.server.scene, host.scene(), document.scene);
     if (merged.kind === 'merged') {
@@ -149,6 +155,11 @@ export class Autosave {
   /** Shows where things stand once nothing is under way, and sees to what is left. */
   rest(): void {
     if (this.disputed !== null) return this.showConflict();
+    if (this.isUnsure && this.pending === null) {
+      this.parts.host.show(this.state(this.trouble === null ? 'saving' : 'offline'));
+      if (this.underWay === null && this.trouble === null) this.schedule(0);
+      return;
+    }
     if (this.hasUnsaved()) {
       void this.keep();
       this.parts.host.show(this.state(this.trouble === null ? 'unsaved' : 'offline'));
@@ -165,9 +176,11 @@ export class Autosave {
 
   private async send(isLast: boolean): Promise<void> {
     clearTimeout(this.timer);
-    const { host, door, newId } = this.parts;
+    const { host, door } = this.parts;
+    if (this.isUnsure && this.pending === null && !(await this.makeSure())) return;
     if (!this.hasUnsaved()) return;
-    this.pending ??= { saveId: newId(), base: this.server.saveNumber, scene: host.scene() };
+    this.pending ??= this.saveToCome();
+    this.nextId = null;
     this.unsavedSince = null;
     const { pending, server } = this;
     if (this.trouble === null) host.show(this.state('saving'));
@@ -176,6 +189,22 @@ export class Autosave {
     if (!isLast) await kept;
     const difference = diffScenes(server.scene, pending.scene);
     this.answered(await door.send({ saveId: pending.saveId, base: pending.base, difference, isLast }), pending);
+  }
+
+  private async makeSure(): Promise<boolean> {
+    try {
+      this.takeIn(await this.parts.door.read());
+      this.trouble = null;
+      return this.disputed === null;
+    } catch (error) {
+      this.trouble = this.parts.door.say(error);
+      return false;
+    }
+  }
+
+  private saveToCome(): PendingSave {
+    this.nextId ??= this.parts.newId();
+    return { saveId: this.nextId, base: this.server.saveNumber, scene: this.parts.host.scene() };
   }
 
   private answered(answer: SaveAnswer, sent: PendingSave): void {
@@ -235,7 +264,8 @@ export class Autosave {
   private keep(): Promise<void> {
     const { keeper, draftId, host } = this.parts;
     const { saveNumber: base, scene: baseScene } = this.server;
-    const draft: Draft = { id: draftId, base, baseScene, pending: this.pending, scene: host.scene() };
+    const pending = this.pending ?? this.saveToCome();
+    const draft: Draft = { id: draftId, base, baseScene, pending, scene: host.scene() };
     return keeper.keep(draft);
   }
 

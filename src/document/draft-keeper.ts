@@ -1,9 +1,12 @@
-// Writes drafts one after another; of several that wait, only the latest is written.
+// Writes drafts at once, as long as the store keeps up; of those that have to wait, only the latest is written. The store
+// carries out writes in the order in which it gets them.
 import type { Draft, DraftStore } from './drafts';
 
+const AT_ONCE = 4;
+
 export class DraftKeeper {
-  private next: Draft | null | undefined = undefined;
-  private running: Promise<void> | null = null;
+  private underWay = 0;
+  private waiting: { draft: Draft | null; readonly done: Promise<void>; readonly finish: () => void } | null = null;
 
   constructor(
     private readonly drafts: DraftStore,
@@ -20,21 +23,29 @@ export class DraftKeeper {
   }
 
   private write(draft: Draft | null): Promise<void> {
-    this.next = draft;
-    this.running ??= this.run();
-    return this.running;
+    if (this.underWay < AT_ONCE) return this.issue(draft);
+    if (this.waiting !== null) {
+      this.waiting.draft = draft;
+      return this.waiting.done;
+    }
+    let finish = (): void => undefined;
+    const done = new Promise<void>((resolve) => {
+      finish = resolve;
+    });
+    this.waiting = { draft, done, finish };
+    return done;
   }
 
-  private async run(): Promise<void> {
-    while (this.next !== undefined) {
-      const draft = this.next;
-      this.next = undefined;
-      try {
-        await (draft === null ? this.drafts.remove(this.id) : this.drafts.put(draft));
-      } catch {
-        // a full disk or a private window: what the server has not got lives in this tab alone
-      }
+  private async issue(draft: Draft | null): Promise<void> {
+    this.underWay += 1;
+    try {
+      await (draft === null ? this.drafts.remove(this.id) : this.drafts.put(draft));
+    } catch {
+      // a full disk or a private window: what the server has not got lives in this tab alone
     }
-    this.running = null;
+    this.underWay -= 1;
+    const next = this.waiting;
+    this.waiting = null;
+    if (next !== null) void this.issue(next.draft).then(next.finish);
   }
 }

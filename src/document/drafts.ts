@@ -3,7 +3,7 @@
 import { z } from 'zod';
 import { loadScene, type Scene } from '#shared/scene';
 
-/** A save that was sent and whose answer is not known. */
+/** A save that was sent and whose answer is not known, or that is to come and may be sent as the page goes away. */
 export interface PendingSave {
   readonly saveId: string;
   readonly base: number;
@@ -17,7 +17,7 @@ export interface Draft {
   readonly base: number;
   /** The document of save number `base`. */
   readonly baseScene: Scene;
-  readonly pending: PendingSave | null;
+  readonly pending: PendingSave;
   readonly scene: Scene;
 }
 
@@ -32,7 +32,7 @@ const stored = z.object({
   id: z.string(),
   base: z.number().int(),
   baseScene: z.unknown(),
-  pending: z.object({ saveId: z.string(), base: z.number().int(), scene: z.unknown() }).nullable(),
+  pending: z.object({ saveId: z.string(), base: z.number().int(), scene: z.unknown() }),
   scene: z.unknown(),
 });
 
@@ -43,13 +43,13 @@ export function readDraft(value: unknown): Draft | null {
   const { pending, ...draft } = parsed.data;
   const baseScene = loadScene(draft.baseScene);
   const scene = loadScene(draft.scene);
-  const sent = pending === null ? null : loadScene(pending.scene);
-  if (!baseScene.ok || !scene.ok || sent?.ok === false) return null;
+  const sent = loadScene(pending.scene);
+  if (!baseScene.ok || !scene.ok || !sent.ok) return null;
   return {
     ...draft,
     baseScene: baseScene.scene,
     scene: scene.scene,
-    pending: pending === null || sent === null ? null : { ...pending, scene: sent.scene },
+    pending: { ...pending, scene: sent.scene },
   };
 }
 

@@ -133,12 +133,8 @@ export function createOpenScene(parts: OpenSceneParts): OpenSceneControl {
     }
     await autosave.keepNow();
     await Promise.all(adopted.map((id) => drafts.remove(id).catch(() => undefined)));
-    if (draft.pending === null && parts.server.saveNumber !== draft.base) autosave.takeIn(parts.server);
-    else {
-      autosave.knows(parts.server.saveNumber);
-      autosave.rest();
-      void autosave.flush();
-    }
+    autosave.knows(parts.server.saveNumber);
+    void autosave.flush();
   }
 
   return {

@@ -30,6 +30,8 @@ export type SaveAnswer =
 export interface SaveDoor {
   readonly send: (request: SaveRequest) => Promise<SaveAnswer>;
   readonly read: () => Promise<ServerDocument>;
+  /** Why a read failed, for the person. */
+  readonly say: (error: unknown) => string;
 }
 
 /** After this long without an answer the save counts as lost, ms. */
@@ -86,5 +88,6 @@ export function saveDoor(sceneId: string): SaveDoor {
       if (!loaded.ok) throw new Error('The scene cannot be read by this version of the program.');
       return { saveNumber, scene: loaded.scene };
     },
+    say: sayProblem,
   };
 }

@@ -2,6 +2,10 @@
 // taken up.
 const nameOf = (draftId: string): string => `gapwright-draft ${draftId}`;
 
+/** ms, and how often */
+const TURN = 100;
+const MOST_TURNS = 4;
+
 /** Marks a sitting as going on until it is released, or its tab ends. */
 export function holdSitting(locks: LockManager | undefined, draftId: string): () => void {
   if (locks === undefined) return () => undefined;
@@ -23,7 +27,12 @@ export async function endedSittings(
   draftIds: readonly string[],
 ): Promise<ReadonlySet<string>> {
   if (locks === undefined) return new Set(draftIds);
-  const { held = [], pending = [] } = await locks.query();
-  const alive = new Set([...held, ...pending].map((lock) => lock.name));
-  return new Set(draftIds.filter((id) => !alive.has(nameOf(id))));
+  // a page that is just being reloaded lets go a moment after the new one has begun
+  for (let turn = 0; ; turn += 1) {
+    const { held = [], pending = [] } = await locks.query();
+    const alive = new Set([...held, ...pending].map((lock) => lock.name));
+    const ended = draftIds.filter((id) => !alive.has(nameOf(id)));
+    if (ended.length === draftIds.length || turn === MOST_TURNS) return new Set(ended);
+    await new Promise((resolve) => setTimeout(resolve, TURN));
+  }
 }

@@ -51,6 +51,7 @@ export class FakeServer {
       if (this.weather !== 'fine') throw new Error('The server could not be reached.');
       return { saveNumber: this.saveNumber, scene: this.scene };
     },
+    say: (error) => (error instanceof Error ? error.message : ''),
   };
 }
 

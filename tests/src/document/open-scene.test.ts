@@ -294,6 +294,31 @@ describe('drafts', () => {
     },
   );
 
+  it.each([false, true])(
+    'give way to a last save that held more, sent as the page went away (somebody saved since: %s)',
+    async (isOlder) => {
+      const server = new FakeServer(row());
+      const drawer = new Drawer();
+      const control = await sit(server, drawer);
+      put(control, 'a', 1);
+      await wait(10);
+      drawer.put = () => new Promise(() => undefined);
+      put(control, 'a', 2);
+      void control.flush(true);
+      await wait(30);
+      expect(server.saveNumber).toBe(2);
+      vanish();
+      if (isOlder) server.saveElsewhere(move('b', 30));
+      const next = new Drawer();
+      for (const [id, draft] of drawer.kept) next.kept.set(id, draft);
+      const again = await sit(server, next);
+      await wait(3000);
+      expect(state(again).save).toEqual({ kind: 'saved', saveNumber: server.saveNumber });
+      expect([xOf(state(again).scene, 'a'), xOf(state(again).scene, 'b')]).toEqual([2, isOlder ? 30 : 20]);
+      expect([text(server.scene), next.kept.size]).toEqual([text(state(again).scene), 0]);
+    },
+  );
+
   it('know their own save even when somebody else saved the same part after it', async () => {
     const server = new FakeServer(row());
     const drawer = new Drawer();
@@ -373,7 +398,7 @@ describe('drafts', () => {
     put(await sit(server, drawer), 'a', 1);
     while (server.requests.length === 0) await wait(10);
     const [draft] = await drawer.all();
-    expect(draft?.pending?.saveId).toBe(server.requests[0]!.saveId);
+    expect(draft?.pending.saveId).toBe(server.requests[0]!.saveId);
   });
 
   it('that cannot be kept do not hinder saving', async () => {
