@@ -64,6 +64,7 @@ export function PartTag({
         <span className="tag-name" style={{ width: nameWidth(part.name) }} title={part.name}>
           {part.name}
         </span>
+        {isTold && <span className="sr-only">, </span>}
         {isTold && <VerdictMark verdict={worst} wordHidden className="tag-verdict" />}
         {part.source === 'guess' && <span className="sr-only">, measures are a guess</span>}
         {presence === 'faded' && <span className="sr-only">, faded</span>}
