@@ -5,6 +5,8 @@ import type { Draft, DraftStore } from './drafts';
 const AT_ONCE = 4;
 
 export class DraftKeeper {
+  /** Whether the latest write did not go through. */
+  hasFailed = false;
   private underWay = 0;
   private waiting: { draft: Draft | null; readonly done: Promise<void>; readonly finish: () => void } | null = null;
 
@@ -40,8 +42,10 @@ export class DraftKeeper {
     this.underWay += 1;
     try {
       await (draft === null ? this.drafts.remove(this.id) : this.drafts.put(draft));
+      this.hasFailed = false;
     } catch {
       // a full disk or a private window: what the server has not got lives in this tab alone
+      this.hasFailed = true;
     }
     this.underWay -= 1;
     const next = this.waiting;

@@ -55,5 +55,9 @@ export function readDraft(value: unknown): Draft | null {
 
 /** Where nothing can be kept: private windows of some browsers, full disks. */
 export function noDrafts(): DraftStore {
-  return { put: () => Promise.resolve(), remove: () => Promise.resolve(), all: () => Promise.resolve([]) };
+  return {
+    put: () => Promise.reject(new Error('Drafts cannot be kept here.')),
+    remove: () => Promise.resolve(),
+    all: () => Promise.resolve([]),
+  };
 }

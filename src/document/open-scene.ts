@@ -32,6 +32,8 @@ export interface OpenSceneControl {
   readonly retry: () => void;
   readonly heard: (saveNumber: number) => void;
   readonly refresh: () => Promise<void>;
+  /** True while leaving the page would lose something: it is not saved, and no draft of it could be kept either. */
+  readonly isAtRisk: () => boolean;
   readonly close: () => Promise<void>;
 }
 
@@ -104,6 +106,7 @@ export function createOpenScene(parts: OpenSceneParts): OpenSceneControl {
   }
   const replace = (scene: Scene): void => put(scene, reconciled(history, scene));
 
+  const keeper = new DraftKeeper(drafts, draftId);
   const autosave = new Autosave({
     host: {
       scene: () => store.getState().scene,
@@ -112,7 +115,7 @@ export function createOpenScene(parts: OpenSceneParts): OpenSceneControl {
       onSaved: (saveNumber) => parts.onSaved?.(saveNumber),
     },
     door,
-    keeper: new DraftKeeper(drafts, draftId),
+    keeper,
     draftId,
     newId,
     server: first === undefined ? parts.server : { saveNumber: first.base, scene: first.baseScene },
@@ -152,6 +155,10 @@ export function createOpenScene(parts: OpenSceneParts): OpenSceneControl {
     retry: () => autosave.retry(),
     heard: (saveNumber) => autosave.heard(saveNumber),
     refresh: () => autosave.refresh(),
+    isAtRisk: () => {
+      const { kind } = store.getState().save;
+      return keeper.hasFailed && kind !== 'saved' && kind !== 'read-only';
+    },
     close: () => autosave.close(),
   };
 }

@@ -92,5 +92,12 @@ function watchPage(control: OpenSceneControl): () => void {
   window.addEventListener('pagehide', leave, { signal });
   window.addEventListener('pageshow', comeBack, { signal });
   window.addEventListener('online', comeBack, { signal });
+  window.addEventListener(
+    'beforeunload',
+    (event) => {
+      if (control.isAtRisk()) event.preventDefault();
+    },
+    { signal },
+  );
   return () => ends.abort();
 }

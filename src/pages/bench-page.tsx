@@ -1,5 +1,5 @@
 import { useQuery, useQueryClient } from '@tanstack/react-query';
-import { useMemo, type ReactNode } from 'react';
+import { useMemo, useState, type ReactNode } from 'react';
 import { useParams, useSearchParams } from 'react-router-dom';
 import { useStore } from 'zustand';
 import { mayShow } from '#shared/access';
@@ -35,7 +35,7 @@ function ScenePage({ sceneId }: { readonly sceneId: string }) {
     () => (document.data === undefined ? null : loadScene(document.data.document)),
     [document.data],
   );
-  if (document.isError) {
+  if (document.isError && document.data === undefined) {
     return <Trouble told={tell(document.error)} onRetry={() => void document.refetch()} />;
   }
   if (loaded?.ok === false) {
@@ -61,17 +61,15 @@ function Sitting({ document, scene, project }: SittingProps) {
   const { id: personId } = useMe();
   const queryClient = useQueryClient();
   const { sceneId, teamId, projectId, saveNumber, canEdit } = document;
-  const place = useMemo(
-    (): SittingPlace => ({
-      sceneId,
-      teamId,
-      personId,
-      canEdit,
-      server: { saveNumber, scene },
-      onEnd: () => void queryClient.invalidateQueries({ queryKey: ['project', projectId] }),
-    }),
-    [sceneId, teamId, projectId, personId, canEdit, saveNumber, scene, queryClient],
-  );
+  // what the sitting started from; a later read of the document is the sitting's own affair
+  const [place] = useState((): SittingPlace => ({
+    sceneId,
+    teamId,
+    personId,
+    canEdit,
+    server: { saveNumber, scene },
+    onEnd: () => void queryClient.invalidateQueries({ queryKey: ['project', projectId] }),
+  }));
   const opened = useOpenBench(place);
   return opened === null ? <Reading /> : <OpenedBench opened={opened} project={project} />;
 }

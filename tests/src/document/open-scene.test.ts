@@ -407,8 +407,11 @@ describe('drafts', () => {
     drawer.put = () => Promise.reject(new Error('The disk is full.'));
     const control = await sit(server, drawer);
     put(control, 'a', 1);
+    await wait(10);
+    expect(control.isAtRisk()).toBe(true);
     await wait(1000);
     expect(state(control).save.kind).toBe('saved');
+    expect(control.isAtRisk()).toBe(false);
   });
 
   it('stay when the page is left while the server is away, and go up when it is not', async () => {
