@@ -1,7 +1,7 @@
 // The one sentence that a report opens with: verdict, the deciding number, the pose, the pair, and what would change it.
 // Lengths stay lengths until a screen or a caption sets them in the reader's unit.
 import type { Finding, Report } from '#shared/check';
-import type { Component, Scene } from '#shared/scene';
+import { isBodyPanel, type Component, type Scene } from '#shared/scene';
 import { formatGap, formatNeed, formatPercent, type LengthDisplay } from '#shared/units';
 import { movesOf } from './directions';
 
@@ -47,12 +47,21 @@ export function depthOf(finding: Finding): number {
   return finding.overlap?.pushOut.length ?? 0;
 }
 
-/** "moving Front cylinder 5/8 rearward and 1/4 up frees it" as parts. */
-export function freeingParts(scene: Scene, finding: Finding): SentencePart[] {
+/** The push-out is the first one's; a body panel stays where it is, and the other goes the opposite way. */
+function moverOf(scene: Scene, { between }: Finding): { readonly id: string; readonly sign: 1 | -1 } {
+  const [first, second] = between;
+  const isPanel = (id: string): boolean => scene.components.some((c) => c.id === id && isBodyPanel(c.category));
+  return isPanel(first) && !isPanel(second) ? { id: second, sign: -1 } : { id: first, sign: 1 };
+}
+
+/** "moving Front cylinder 5/8 rearward and 1/4 up frees this pair" as parts; `begins`: at the beginning of a sentence. */
+export function freeingParts(scene: Scene, finding: Finding, begins = false): SentencePart[] {
   const { overlap } = finding;
   if (overlap === null) return [];
-  const moves = movesOf(overlap.pushOut.vector, LEAST_MOVE);
-  const parts: SentencePart[] = [`moving ${nameOf(scene, finding.between[0])} `];
+  const { id, sign } = moverOf(scene, finding);
+  const [x, y, z] = overlap.pushOut.vector;
+  const moves = movesOf([x * sign, y * sign, z * sign], LEAST_MOVE);
+  const parts: SentencePart[] = [`${begins ? 'Moving' : 'moving'} ${nameOf(scene, id)} `];
   for (const [i, move] of moves.entries()) {
     if (i > 0) parts.push(i === moves.length - 1 ? ' and ' : ', ');
     parts.push({ need: move.distance }, ` ${move.direction}`);
@@ -85,7 +94,7 @@ export function reportSentence(scene: Scene, report: Report): Sentence {
   switch (finding.verdict) {
     case 'hits': {
       const depth = depthOf(finding);
-      const how: SentencePart[] = depth > 0 ? [' in by ', { need: depth }] : [];
+      const how: SentencePart[] = depth > 0 ? [', ', { need: depth }, ' deep,'] : [];
       return {
         verdict: 'hits',
         parts: [`${a} hits ${b}`, ...how, ...pose, '; ', ...freeingParts(scene, finding), '.'],

@@ -103,14 +103,7 @@ function Actions({ bench, facts, opened, project }: ActionsProps) {
   const { open, live, saveNow } = opened;
   const sceneId = useStore(open, (o) => o.sceneId);
   const saveNumber = useStore(open, (o) => o.save.saveNumber);
-  const dryFit = (
-    <DryFitButton
-      sceneId={sceneId}
-      saveNumber={saveNumber}
-      saveNow={saveNow}
-      canRun={mayShow(project.role, 'dry-fit.run')}
-    />
-  );
+  const dryFit = { sceneId, saveNumber, saveNow, canRun: mayShow(project.role, 'dry-fit.run') };
   return (
     <>
       <PictureButton
@@ -122,9 +115,9 @@ function Actions({ bench, facts, opened, project }: ActionsProps) {
         saveNow={saveNow}
         capture={() => captureNamed(bench.view, facts.words)}
         now={() => ({ scene: open.getState().scene, findings: live.getState().findings })}
-        dryFit={dryFit}
+        dryFit={<DryFitButton {...dryFit} quiet />}
       />
-      {dryFit}
+      <DryFitButton {...dryFit} />
     </>
   );
 }

@@ -19,19 +19,21 @@ export interface DryFitButtonProps {
   /** Brings what is unsaved to the server; the save number, or null if it is not all there. */
   readonly saveNow: () => Promise<number | null>;
   readonly canRun: boolean;
+  /** Another one on the page says how it ended. */
+  readonly quiet?: boolean;
 }
 
 const UNSAVED =
   'The scene could not be saved, so there is nothing to check yet. See the save state at the top, then run it again.';
 
-export function DryFitButton({ sceneId, saveNumber, saveNow, canRun }: DryFitButtonProps) {
+export function DryFitButton({ sceneId, saveNumber, saveNow, canRun, quiet = false }: DryFitButtonProps) {
   const dryFits = useQuery({ ...dryFitsQuery(sceneId), enabled: canRun });
   const [watched, setWatched] = useState<{ readonly id: string; readonly saveNumber: number } | null>(null);
   const run = useRunDryFit(sceneId, saveNow);
   const cancel = useCancelDryFit();
   // one that was under way when the bench was opened is watched as well
   const latest = dryFits.data?.find((each) => each.id === watched?.id || isUnderWay(each)) ?? null;
-  useTold(latest);
+  useTold(quiet ? null : latest);
   if (!canRun) return null;
   const start = (): void =>
     run.mutate(undefined, {

@@ -4,12 +4,11 @@ import { findingKey, type Finding } from '#shared/check';
 import { freeingParts } from '#shared/review';
 import type { Scene } from '#shared/scene';
 import type { LengthDisplay } from '#shared/units';
-import { Gap } from '../../components/fraction';
+import { Fraction, Gap } from '../../components/fraction';
 import { Need, SentenceLine } from '../../components/sentence-line';
 import { StrokeTrack } from '../../components/stroke-track';
 import { VerdictMark } from '../../components/verdict-mark';
-import { VerdictReading } from '../../components/verdict-reading';
-import { pairName, whereWords } from '../../lib/finding-words';
+import { pairName, readingOf, whereWords } from '../../lib/finding-words';
 import type { WordChoice } from '../../lib/part-words';
 import { ruleName, ruleWords } from '../../lib/rule-words';
 import { strokesOf } from '../../lib/strokes';
@@ -67,7 +66,7 @@ type Said = Pick<FindingEntryProps, 'scene' | 'finding' | 'display'>;
 /** What would change it, in the shop's directions. */
 function Change({ scene, finding, display }: Said) {
   if (finding.verdict === 'hits') {
-    const parts = freeingParts(scene, finding);
+    const parts = freeingParts(scene, finding, true);
     return parts.length === 0 ? null : (
       <p className="finding-entry-change">
         <SentenceLine parts={[...parts, '.']} display={display} />
@@ -92,13 +91,12 @@ function Figures({ scene, finding, display }: Said) {
     0,
   );
   const isJoint = finding.rule === 'joint';
+  const { word, parts } = readingOf(finding, display);
   return (
     <dl className="finding-entry-figures">
       <div>
-        <dt>gap</dt>
-        <dd className="font-bold">
-          <VerdictReading finding={finding} display={display} />
-        </dd>
+        <dt>{word === '' ? 'gap' : word}</dt>
+        <dd className="font-bold">{parts === null ? 'no depth known' : <Fraction parts={parts} />}</dd>
       </div>
       {!isJoint && (
         <>

@@ -18,7 +18,7 @@ export function FindingPicture({ picture, alt, to }: FindingPictureProps) {
   if (picture.kind === 'there') {
     return (
       <Link to={to} className="finding-plate" aria-label={`${alt}: see it on the bench`}>
-        <img src={picture.url} alt="" width={1280} height={840} loading="lazy" />
+        <img src={picture.url} alt="" width={640} height={420} loading="lazy" />
       </Link>
     );
   }

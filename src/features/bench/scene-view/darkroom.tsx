@@ -11,8 +11,8 @@ import { SceneFrame } from './scene-frame';
 import { meshNamesOf } from './static-scene';
 import '../styles/bench.css';
 
-/** CSS px; the picture is twice as large. */
-const SIZE = { width: 640, height: 420 };
+/** CSS px; the picture is twice as large. Small, so that its words can be read beside a line of text. */
+const SIZE = { width: 320, height: 210 };
 
 export type TakeFinding = (finding: Finding) => Promise<Picture>;
 

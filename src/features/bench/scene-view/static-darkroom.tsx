@@ -6,6 +6,6 @@ import { createStaticScene, type StaticSceneParts } from './static-scene';
 export type StaticDarkroomProps = StaticSceneParts & Omit<DarkroomProps, 'bench'>;
 
 export function StaticDarkroom({ display, words, onReady, onFail, ...parts }: StaticDarkroomProps) {
-  const [bench] = useState(() => createStaticScene(parts));
+  const [bench] = useState(() => createStaticScene({ ...parts, showsLasers: false }));
   return <Darkroom bench={bench} display={display} words={words} onReady={onReady} onFail={onFail} />;
 }

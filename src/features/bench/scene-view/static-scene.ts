@@ -19,11 +19,13 @@ export interface StaticSceneParts {
   /** How to tell a person that a mesh could not be read. */
   readonly say: (error: unknown) => string;
   readonly standpoint?: StandpointId;
+  readonly showsLasers?: boolean;
 }
 
 const nothing = (): void => undefined;
 
-export function createStaticScene({ scene, findings, loadMesh, say, standpoint = 'bay' }: StaticSceneParts): Bench {
+export function createStaticScene(parts: StaticSceneParts): Bench {
+  const { scene, findings, loadMesh, say, standpoint = 'bay', showsLasers = true } = parts;
   const open = createStore<OpenScene>()(() => ({
     sceneId: '',
     scene,
@@ -51,7 +53,7 @@ export function createStaticScene({ scene, findings, loadMesh, say, standpoint =
   return {
     open,
     live,
-    session: createSession({ standpoint }),
+    session: createSession({ standpoint, showsLasers }),
     meshes,
     frames: createFrameStore(),
     view: createViewControl(),
