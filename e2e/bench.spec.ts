@@ -6,7 +6,7 @@ interface Named {
 }
 
 // the picture is drawn without a graphics unit here: a small window keeps it quick
-test.use({ viewport: { width: 1120, height: 700 } });
+test.use({ viewport: { width: 1000, height: 640 } });
 
 interface Start {
   readonly team: string;
@@ -35,6 +35,13 @@ const box = (id: string, name: string, category: string, size: number[], at: num
   ...more,
 });
 
+/** Opens a scene; the camera goes at once to where it is sent, as it does for people who want no movement. */
+async function openBench(page: Page, scene: string): Promise<void> {
+  await page.emulateMedia({ reducedMotion: 'reduce' });
+  await page.goto(`/scenes/${scene}`);
+  await expect(page.getByRole('heading', { name: 'Layout 1' })).toBeVisible();
+}
+
 /** A firewall, a pedal and a wiper motor, put there through the API. */
 async function sceneWithParts(member: Member): Promise<Start> {
   const start = await newScene(member);
@@ -54,7 +61,7 @@ async function sceneWithParts(member: Member): Promise<Start> {
       ],
     },
   });
-  await page.goto(`/scenes/${start.scene}`);
+  await openBench(page, start.scene);
   return start;
 }
 
@@ -67,7 +74,7 @@ test('A designer arranges a pedal box, a wiper motor and a scanned liner, gives 
   await page.request.post(`/api/teams/${team}/meshes`, {
     multipart: { file: { name: 'fender_liner.stl', mimeType: 'model/stl', buffer: boxStl(380, 8, 300) } },
   });
-  await page.goto(`/scenes/${scene}`);
+  await openBench(page, scene);
   await expect(page.getByText('Nothing on the bench yet.')).toBeVisible();
   await expect(page.getByText('11 missing')).toBeVisible();
   await expectAccessible(page);
@@ -171,4 +178,163 @@ test('A designer arranges a pedal box, a wiper motor and a scanned liner, gives 
     await expect(tag(page, 'fender liner')).toBeVisible();
     await expect(page.getByText('Pedal box', { exact: true })).toBeVisible();
   });
+});
+
+test('Lengths are typed as in the shop; what cannot be read is refused and says why', async ({ enter }) => {
+  const member = await enter('Ona Reyes');
+  const { page } = member;
+  await sceneWithParts(member);
+  await tag(page, 'Brake pedal').click();
+  const place = page.getByLabel('right of column line');
+  await expect(place).toHaveValue('4 23/32');
+  for (const [typed, shown] of [
+    ['5 3/8', '5 3/8'],
+    ['5.5in', '5 1/2'],
+    ['136,5 mm', '5 3/8'],
+    ['4-1/8"', '4 1/8'],
+    ['+1/8', '4 1/4'],
+    ['-1/16', '4 3/16'],
+  ] as const) {
+    await place.fill(typed);
+    await place.press('Enter');
+    await expect(place).toHaveValue(shown);
+  }
+  await place.fill('1,250');
+  await place.press('Enter');
+  await expect(page.getByText('1,250 could mean 1250 or 1.25')).toBeVisible();
+  await expect(place).toHaveValue('1,250');
+  await place.press('Escape');
+  await expect(place).toHaveValue('4 3/16');
+
+  await page.getByRole('button', { name: 'Unit: Inches and fractions' }).click();
+  await page.getByRole('menuitem', { name: 'Millimetres' }).click();
+  await expect(place).toHaveValue('106.4');
+  await page.getByRole('tab', { name: 'Size' }).click();
+  await page.getByLabel('wide').fill('-4');
+  await page.keyboard.press('Enter');
+  await expect(page.getByText('Must be at least 0.4 mm.')).toBeVisible();
+  await expectAccessible(page);
+});
+
+test('Everything at the bench works without a mouse', async ({ enter }) => {
+  const member = await enter('Per Aske');
+  const { page } = member;
+  await sceneWithParts(member);
+  await tag(page, 'Wiper motor').focus();
+  await page.keyboard.press('Enter');
+  await expect(page.getByLabel('left of column line')).toHaveValue('9 29/64');
+  // from the driver's seat the right arrow is the car's right
+  await page.keyboard.press('1');
+  await expect(page.getByRole('button', { name: "Driver's seat" })).toHaveAttribute('aria-pressed', 'true');
+  await page.keyboard.press('ArrowRight');
+  await expect(page.getByLabel('left of column line')).toHaveValue('9 25/64');
+  await page.keyboard.press('Shift+ArrowLeft');
+  await expect(page.getByLabel('left of column line')).toHaveValue('9 41/64');
+  await expect(page.getByRole('button', { name: 'Undo: Move Wiper motor' })).toBeEnabled();
+  await page.keyboard.press('h');
+  await expect(page.getByRole('button', { name: 'Take Wiper motor off the bench' })).toBeAttached();
+  await page.keyboard.press('u');
+  await page.keyboard.press('?');
+  await expect(page.getByRole('dialog', { name: 'Keys' })).toContainText('nudge by the step');
+  await page.keyboard.press('Escape');
+  await page.keyboard.press('c');
+  await expect(page.getByRole('group', { name: 'Cutaway' })).toBeVisible();
+  await page.keyboard.press('c');
+  await page.keyboard.press('n');
+  await expect(page.getByRole('region', { name: /^Finding/ })).toBeVisible();
+  await page.keyboard.press('Escape');
+  await page.keyboard.press('m');
+  await expect(page.getByRole('menuitem', { name: 'Duplicate' })).toBeVisible();
+  await page.keyboard.press('Escape');
+  await page.keyboard.press('Delete');
+  await expect(tag(page, 'Wiper motor')).toBeHidden();
+  await page.getByRole('button', { name: 'Undo', exact: true }).click();
+  await expect(tag(page, 'Wiper motor')).toBeVisible();
+});
+
+test('A hand drags a part by its handle: the ladder moves along, Esc puts it back', async ({ enter }) => {
+  const member = await enter('Liv Torvald');
+  const { page } = member;
+  await sceneWithParts(member);
+  await tag(page, 'Wiper motor').click();
+  await page.keyboard.press('8');
+  const rung = ladder(page).getByRole('button', { name: /Firewall, Wiper motor/ });
+  await expect(rung).toContainText('1 5/16');
+  const rear = page.locator('.handle', { hasText: 'rear' }).locator('.handle-hit');
+  const [x1, y1, x2, y2] = await rear.evaluate((line) =>
+    ['x1', 'y1', 'x2', 'y2'].map((k) => Number(line.getAttribute(k))),
+  );
+  const [x, y] = [(x1! + x2!) / 2, (y1! + y2!) / 2];
+  await page.mouse.move(x, y);
+  await page.mouse.down();
+  await page.mouse.move(x + (x2! - x1!) * 0.2, y + (y2! - y1!) * 0.2, { steps: 4 });
+  await expect(rung).not.toContainText('1 5/16');
+  await page.keyboard.press('Escape');
+  await page.mouse.up();
+  await expect(rung).toContainText('1 5/16');
+  await expect(page.getByRole('button', { name: 'Nothing to undo' })).toBeDisabled();
+  await page.mouse.move(x, y);
+  await page.mouse.down();
+  await page.mouse.move(x + (x2! - x1!) * 0.2, y + (y2! - y1!) * 0.2, { steps: 4 });
+  await page.mouse.up();
+  await expect(page.getByRole('button', { name: 'Undo: Move Wiper motor' })).toBeEnabled();
+});
+
+test('Two people change one scene: different parts go together, the same part is shown side by side', async ({
+  enter,
+}) => {
+  const owner = await enter('Odile Ferris');
+  const friend = await enter('Tam Kerr');
+  const { team, scene } = await sceneWithParts(owner);
+  await api(owner.page, 'POST', `/teams/${team}/invitations`, { email: friend.email, role: 'designer', projects: [] });
+  const link = await linkInMail(friend.page.request, friend.email, /invites you/);
+  await friend.page.request.post(`/api/invitations/${link.split('/').at(-1)}/accept`);
+  await openBench(friend.page, scene);
+
+  const move = async ({ page }: Member, part: string, field: string | RegExp, text: string): Promise<void> => {
+    await tag(page, part).click();
+    await page.getByLabel(field).fill(text);
+    await page.getByLabel(field).press('Enter');
+  };
+  const saved = ({ page }: Member) => expect(page.locator('.save-words')).toHaveText('saved');
+  await saved(friend);
+  await move(owner, 'Brake pedal', 'right of column line', '6');
+  await saved(owner);
+  await move(friend, 'Wiper motor', 'left of column line', '10');
+  await saved(friend);
+  // the friend's save brought the owner's move along
+  await tag(friend.page, 'Brake pedal').click();
+  await expect(friend.page.getByLabel('right of column line')).toHaveValue('6');
+
+  await move(owner, 'Brake pedal', 'right of column line', '7');
+  await saved(owner);
+  await move(friend, 'Brake pedal', 'right of column line', '5');
+  await friend.page.getByRole('button', { name: 'Look at both' }).click();
+  const both = friend.page.getByRole('dialog', { name: 'Two people changed the same' });
+  await expect(both.getByRole('row', { name: /^Brake pedal/ })).toBeVisible();
+  await expectAccessible(friend.page);
+  await both.getByRole('button', { name: 'Take theirs' }).click();
+  await saved(friend);
+  await expect(friend.page.getByLabel('right of column line')).toHaveValue('7');
+});
+
+test('On a phone the bench is read: gaps, tape and tags come up from below', async ({ enter }) => {
+  const member = await enter('Ida Holm');
+  const { page } = member;
+  await page.setViewportSize({ width: 390, height: 844 });
+  await sceneWithParts(member);
+  const gaps = page.getByRole('button', { name: /^Gaps/ });
+  await expect(gaps).toBeVisible();
+  await expectNoSideways(page);
+  await expectAccessible(page);
+  await gaps.click();
+  await ladder(page)
+    .getByRole('button', { name: /Firewall, Wiper motor/ })
+    .click();
+  await tag(page, 'Wiper motor').click();
+  await page.getByRole('button', { name: /^Tape/ }).click();
+  await expect(page.getByLabel('left of column line')).toHaveValue('9 29/64');
+  await expectNoSideways(page);
+  await page.getByRole('button', { name: 'Put the tape away' }).click();
+  await expect(page.getByLabel('left of column line')).toBeHidden();
 });

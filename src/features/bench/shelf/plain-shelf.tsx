@@ -9,6 +9,7 @@ import { LengthField } from '../../../components/length-field';
 import { Select, TextField } from '../../../components/text-field';
 import { categoryLabel } from '../../../lib/part-words';
 import { useFacts, useOpen } from '../bench-model';
+import { LEAST_SIZE } from '../least-size';
 import { plainPart } from '../new-parts';
 import { LengthTriple } from '../tape/triple-fields';
 import { CATEGORY_FOR } from './roll-call-categories';
@@ -44,14 +45,14 @@ export function PlainShelf({ wanted, at, onPlace }: BoardProps) {
           legend="Size"
           labels={['long', 'wide', 'high']}
           value={size}
-          least={0.01}
+          least={LEAST_SIZE}
           disabled={false}
           onCommit={setSize}
         />
       ) : (
         <div className="pair">
-          <LengthField label="Diameter" display={display} value={diameter} least={0.01} onCommit={setDiameter} />
-          <LengthField label="Length" display={display} value={length} least={0.01} onCommit={setLength} />
+          <LengthField label="Diameter" display={display} value={diameter} least={LEAST_SIZE} onCommit={setDiameter} />
+          <LengthField label="Length" display={display} value={length} least={LEAST_SIZE} onCommit={setLength} />
         </div>
       )}
       <TextField

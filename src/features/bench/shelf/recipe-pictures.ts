@@ -12,8 +12,9 @@ import { eyeDirection, pictureAxes } from '../viewport/view';
 import { hasWebGl2 } from '../viewport/webgl';
 
 const SIZE = 256;
-/** From the front left, above: as one looks at a part on a bench. */
-const FROM = { around: 215, above: 26 };
+/** From one side and above: as one looks at a part on a bench. */
+const AHEAD = { around: 215, above: 26 };
+const BEHIND = { around: 35, above: 22 };
 const ROOM = 1.16;
 
 const NO_MESHES: MeshSource = {

@@ -3,6 +3,7 @@ import { edits, type Component, type Solid } from '#shared/scene';
 import { Length } from '../../../components/fraction';
 import { LengthField } from '../../../components/length-field';
 import { useBench, useFacts, useOpen, useShown } from '../bench-model';
+import { LEAST_SIZE } from '../least-size';
 import { useSelection } from '../use-selection';
 import { MeshFields } from './mesh-fields';
 import { RecipeFields } from './recipe-fields';
@@ -56,7 +57,7 @@ function SolidFields({ part, solid }: { readonly part: Component; readonly solid
         legend="box"
         labels={['long', 'wide', 'high']}
         value={shape.size}
-        least={0.01}
+        least={LEAST_SIZE}
         disabled={!canEdit}
         onCommit={(size) => set({ ...shape, size })}
       />
@@ -70,7 +71,7 @@ function SolidFields({ part, solid }: { readonly part: Component; readonly solid
         look="measure"
         display={display}
         value={shape.diameter}
-        least={0.01}
+        least={LEAST_SIZE}
         disabled={!canEdit}
         onCommit={(diameter) => set({ ...shape, diameter })}
       />
@@ -79,7 +80,7 @@ function SolidFields({ part, solid }: { readonly part: Component; readonly solid
         look="measure"
         display={display}
         value={shape.length}
-        least={0.01}
+        least={LEAST_SIZE}
         disabled={!canEdit}
         onCommit={(length) => set({ ...shape, length })}
       />
