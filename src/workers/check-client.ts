@@ -70,7 +70,7 @@ export class CheckClient {
     this.version += 1;
     this.isUnanswered = true;
     this.worker ??= this.start();
-    this.worker.postMessage({ version: this.version, teamId: this.teamId, scene });
+    this.worker.postMessage({ version: this.version, teamId: this.teamId, scene, isPreview: this.wasPreview });
     this.expectWord();
   }
 

@@ -22,9 +22,17 @@ const MOST_FINDINGS = 8000;
 
 interface Waiting {
   readonly task: Task;
+  readonly name: string;
   readonly key: string;
   readonly rank: number;
   readonly margin: number;
+}
+
+/** The latest that was worked out for a pair in a configuration, in whatever document. */
+interface Last {
+  readonly finding: Finding;
+  /** Number of the document. */
+  readonly turn: number;
 }
 
 const NO_PLAN: Plan = { tasks: [], unchecked: [] };
@@ -34,6 +42,9 @@ export class CheckCore {
   private usable: Usable | null = null;
   private plan: Plan = NO_PLAN;
   private findings: Finding[] = [];
+  private last = new Map<string, Last>();
+  private turn = 0;
+  private isPreview = false;
   /** Next one last. */
   private queue: Waiting[] = [];
   private troubles: string[] = [];
@@ -43,26 +54,33 @@ export class CheckCore {
   private readonly keys = new TaskKeys();
   private readonly meter = new GapMeter();
 
-  take(scene: Scene): void {
+  /** @param isPreview a hand is moving something, and the next document will be here before this one is done */
+  take(scene: Scene, isPreview = false): void {
     this.scene = scene;
-    const margins = new Map(this.findings.map((f) => [findingKey(f), f.margin]));
+    this.isPreview = isPreview;
+    this.turn += 1;
     this.usable = usableScene(scene, this.meshes);
-    const { prepared } = this.usable;
-    this.keys.take(prepared);
-    this.plan = planCheck(prepared);
+    this.keys.take(this.usable.prepared);
+    this.plan = planCheck(this.usable.prepared);
     this.findings = [];
     this.troubles = [];
     this.queue = [];
+    const last = new Map<string, Last>();
     for (const task of this.plan.tasks) {
+      const name = nameOf(task);
       const key = this.keys.keyOf(task);
       const known = this.cache.get(key);
-      if (known === undefined) {
-        this.queue.push({ task, key, rank: this.rankOf(task), margin: margins.get(nameOf(task)) ?? 0 });
-      } else {
+      const before = this.last.get(name);
+      if (known !== undefined) {
         this.remember(key, known);
         this.findings.push(known);
+        last.set(name, { finding: known, turn: this.turn });
+        continue;
       }
+      if (before !== undefined) last.set(name, before);
+      this.queue.push({ task, name, key, rank: this.rankOf(task, before), margin: before?.finding.margin ?? 0 });
     }
+    this.last = last;
     this.queue.sort((x, y) => y.rank - x.rank || y.margin - x.margin);
   }
 
@@ -75,7 +93,7 @@ export class CheckCore {
   putMesh(name: string, mesh: LoadedMesh): void {
     this.meshes.set(name, mesh);
     this.failed.delete(name);
-    if (this.scene !== null) this.take(this.scene);
+    if (this.scene !== null) this.take(this.scene, this.isPreview);
   }
 
   /** @param sentence says what is wrong with it */
@@ -100,6 +118,7 @@ export class CheckCore {
         const finding = computeFinding(this.usable.prepared, next.task, this.meter);
         this.remember(next.key, finding);
         this.findings.push(finding);
+        this.last.set(next.name, { finding, turn: this.turn });
       } catch {
         const [a, b] = [next.task.a, next.task.b].map((side) => side.component.component.name) as [string, string];
         this.troubles.push(`The gap of ${a} and ${b} could not be worked out.`);
@@ -119,7 +138,7 @@ export class CheckCore {
       phase: isReading ? 'reading-meshes' : this.queue.length > 0 ? 'checking' : rest,
       done: total - this.queue.length,
       total,
-      findings: prepared === undefined ? [] : assembleReport(prepared, this.plan, this.findings, '').findings,
+      findings: prepared === undefined ? [] : assembleReport(prepared, this.plan, this.shown(), '').findings,
       unchecked: this.plan.unchecked,
       meshes: prepared?.meshes ?? [],
       problem,
@@ -138,10 +157,20 @@ export class CheckCore {
     return all.length <= 2 ? all.join(' ') : `${all.slice(0, 2).join(' ')} And ${all.length - 2} more.`;
   }
 
-  /** What the hand just moved comes first, at rest before motions, and the tightest as last seen before the rest. */
-  private rankOf(task: Task): number {
+  /** In a gesture the pairs still to come are shown as they were a moment ago, so that no gap blinks; else not at all. */
+  private shown(): readonly Finding[] {
+    if (!this.isPreview) return this.findings;
+    return [...this.findings, ...this.queue.flatMap(({ name }) => this.last.get(name)?.finding ?? [])];
+  }
+
+  /**
+   * What was just moved comes first, at rest before motions, and the tightest as last seen before the rest. In a gesture,
+   * where no document is ever done, whatever was not worked out for longest comes first, with a start for what is at rest.
+   */
+  private rankOf(task: Task, before: Last | undefined): number {
     const motions = (task.a.motion === null ? 0 : 1) + (task.b.motion === null ? 0 : 1);
-    return (this.keys.isTouched(task) ? 0 : 3) + motions;
+    if (!this.keys.isTouched(task)) return Number.MAX_SAFE_INTEGER - 2 + motions;
+    return this.isPreview ? (before?.turn ?? 0) + 2 * motions : motions;
   }
 
   private remember(key: string, finding: Finding): void {

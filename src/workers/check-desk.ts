@@ -65,7 +65,7 @@ export function createCheckDesk({ answer, readMesh, defer, now }: DeskParts): (o
     const due = [...failedAt].filter(([, at]) => now() - at >= FORGIVE_AFTER).map(([name]) => name);
     for (const name of due) failedAt.delete(name);
     core.forgive(due);
-    core.take(next.scene);
+    core.take(next.scene, next.isPreview);
     fetchWanted(next.teamId);
     goOn();
   };

@@ -7,7 +7,10 @@ export interface LiveCheck {
   readonly phase: 'reading-meshes' | 'checking' | 'done' | 'failed';
   readonly done: number;
   readonly total: number;
-  /** In the report's order; while a check runs, the old findings of pairs that are not touched stay. */
+  /**
+   * In the report's order. While a check runs, the findings of pairs that are not touched stay; those of pairs that a hand is
+   * just moving stay as they were last worked out, a moment ago, until it lets go.
+   */
   readonly findings: readonly Finding[];
   readonly unchecked: readonly (readonly [string, string])[];
   readonly meshes: readonly MeshEntry[];
@@ -29,6 +32,8 @@ export interface CheckOrder {
   readonly version: number;
   readonly teamId: string;
   readonly scene: Scene;
+  /** A hand is moving something: others of its kind will follow at once. */
+  readonly isPreview: boolean;
 }
 
 export interface CheckAnswer {

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { checkScene, prepareScene } from '#shared/check';
+import { checkScene, findingKey, prepareScene } from '#shared/check';
 import { patchHead, patchRules, removeComponents, setComponentPose, setTolerance, type Scene } from '#shared/scene';
 import { CheckCore } from '../../../src/workers/check-core';
 import { benchScene, MESH, pyramidMesh } from './scenes';
@@ -120,6 +120,32 @@ describe('the live check', () => {
     }
     const stages = order.filter((stage, i) => stage !== order[i - 1]);
     expect(stages).toEqual(['post true', 'post false', 'other true', 'other false']);
+  });
+
+  it('lets no gap blink while a hand moves, works out each in its turn, and shows none but its own when it lets go', () => {
+    const core = started();
+    const scene = benchScene();
+    core.take(scene);
+    finish(core);
+    const all = core.answer().findings.length;
+    const worked = new Set<string>();
+    let before = core.answer().findings;
+    for (let x = 1; x <= 40; x += 1) {
+      core.take(move('post', 30 + x / 10, 60)(scene), true);
+      core.run(() => true);
+      core.run(() => true);
+      const { findings, phase } = core.answer();
+      expect([findings.length, phase]).toEqual([all, 'checking']);
+      for (const f of findings) if (!before.includes(f)) worked.add(findingKey(f));
+      before = findings;
+    }
+    const touched = before.filter((f) => f.between.includes('post')).map(findingKey);
+    expect([...worked].sort()).toEqual(touched.sort());
+    const end = move('post', 37, 60)(scene);
+    core.take(end);
+    expect(core.answer().findings.length).toBe(all - touched.length);
+    finish(core);
+    byteEqual(core.answer().findings, whole(end).findings);
   });
 
   it('gives all other gaps where a mesh is still on its way, or bad', () => {

@@ -23,7 +23,7 @@ function desk(read: (name: string) => Promise<MeshAnswer>, millisecondsATask = 5
   return {
     answers,
     asked,
-    order: (version: number, scene = benchScene()) => take({ version, teamId: 'team', scene }),
+    order: (version: number, scene = benchScene()) => take({ version, teamId: 'team', scene, isPreview: false }),
     turn: () => turns.shift()?.(),
     settle: async () => {
       for (let i = 0; i < 500; i += 1) {
