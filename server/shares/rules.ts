@@ -13,8 +13,10 @@ const { picture, share } = tables;
 /** 192 bits: not to be guessed. */
 export const newToken = (): string => randomBytes(24).toString('base64url');
 
-/** Findings that a share page lists. */
-const SHOWN = 12;
+/** Clear pairs fill the list of closest calls up to so many. */
+const LEAST_SHOWN = 12;
+/** Trouble goes out whole, so that a stroke never looks clearer than it is; up to what a phone can take. */
+const MOST_SHOWN = 400;
 
 export interface OpenShare {
   readonly row: typeof share.$inferSelect;
@@ -65,7 +67,11 @@ function drawable(scene: Scene, meshes: readonly string[]): unknown {
   };
 }
 
-const isWorth = (f: Finding): boolean => f.verdict !== 'seated';
+function shownFindings(findings: readonly Finding[]): Finding[] {
+  const trouble = findings.filter((f) => f.verdict !== 'seated' && f.verdict !== 'clears');
+  const clears = findings.filter((f) => f.verdict === 'clears');
+  return [...trouble.slice(0, MOST_SHOWN), ...clears.slice(0, Math.max(0, LEAST_SHOWN - trouble.length))];
+}
 
 /** What the page of a share gets. */
 export async function describeShare(db: Queryable, token: string) {
@@ -85,7 +91,7 @@ export async function describeShare(db: Queryable, token: string) {
     totals: report?.totals ?? {},
     missing: missingFrom(rollCall(scene, absent)).map((m) => (m.lacks === null ? m.label : `${m.label}: ${m.lacks}`)),
     document: drawable(scene, meshes),
-    findings: (report?.findings ?? []).filter(isWorth).slice(0, SHOWN),
+    findings: shownFindings(report?.findings ?? []),
     meshes: [...meshes],
     hasPicture,
   };

@@ -1,20 +1,18 @@
 // What a share link shows: the sentence, the figures, the picture, the scene to turn, the worst findings, the cautions.
-import { useState, type ReactNode } from 'react';
+import type { ReactNode } from 'react';
 import { readSharedPicture } from '#shared/api';
-import { findingKey, type Finding } from '#shared/check';
+import type { Finding } from '#shared/check';
 import type { Scene } from '#shared/scene';
 import type { LengthDisplay } from '#shared/units';
 import { Cautions } from '../../components/cautions';
-import { Section } from '../../components/page-head';
 import { SentenceLine } from '../../components/sentence-line';
 import { Stamp } from '../../components/stamp';
 import { Select } from '../../components/text-field';
 import { VERDICT_WORDS, VerdictMark, VerdictTotals } from '../../components/verdict-mark';
-import { VerdictReading } from '../../components/verdict-reading';
 import { When } from '../../components/when';
 import { Wordmark } from '../../components/wordmark';
 import { addressOf } from '../../lib/api';
-import { pairName, whereWords } from '../../lib/finding-words';
+import { FindingList } from './finding-list';
 import { sharedFindings, sharedSentence, type SharedRevision } from './shared-scene';
 import './shares.css';
 
@@ -53,7 +51,7 @@ export function SharedSheet({ token, shared, scene, display, onDisplay, say, dra
           <Select
             label="Lengths in"
             labelHidden
-            className="w-40"
+            className="w-48"
             value={display}
             onChange={(event) => onDisplay(event.target.value as LengthDisplay)}
           >
@@ -81,74 +79,26 @@ export function SharedSheet({ token, shared, scene, display, onDisplay, say, dra
           )}
         </div>
         <div className="shared-body">
-          <div className="shared-side">
-            {hasPicture && (
-              <a href={picture} className="block" aria-label="The picture in full size">
-                <img
-                  src={picture}
-                  alt={`${sceneName}, revision ${number}, with its worst findings`}
-                  className="taken-picture"
-                />
-              </a>
-            )}
-            {scene !== null && (
-              <FindingList scene={scene} findings={findings} display={display} onFinding={onFinding} />
-            )}
-          </div>
-          <section aria-label="The scene in 3D">{drawing}</section>
+          {hasPicture && (
+            <a href={picture} className="shared-picture block" aria-label="The picture in full size">
+              <img
+                src={picture}
+                alt={`${sceneName}, revision ${number}, with its worst findings`}
+                className="taken-picture"
+              />
+            </a>
+          )}
+          {scene !== null && (
+            <section aria-label="The scene in 3D" className="shared-drawing">
+              {drawing}
+            </section>
+          )}
+          {scene !== null && (
+            <FindingList scene={scene} findings={findings} totals={totals} display={display} onFinding={onFinding} />
+          )}
         </div>
         <Cautions />
       </main>
     </div>
-  );
-}
-
-type FindingListProps = Pick<SharedSheetProps, 'display' | 'onFinding'> & {
-  readonly scene: Scene;
-  readonly findings: readonly Finding[];
-};
-
-function FindingList({ scene, findings, display, onFinding }: FindingListProps) {
-  const [open, setOpen] = useState<string | null>(null);
-  if (findings.length === 0) return null;
-  const entry = (finding: Finding): ReactNode => (
-    <>
-      <span className="font-semibold">{pairName(scene, finding)}</span>
-      <span className="text-right font-bold">
-        <VerdictReading finding={finding} display={display} />
-      </span>
-      <span className="text-sm text-soft">{whereWords(scene, finding)}</span>
-      <span className="text-right text-sm">
-        <VerdictMark verdict={finding.verdict} />
-      </span>
-    </>
-  );
-  return (
-    <Section title="Closest calls" note={onFinding === null ? undefined : 'tap one to see it'}>
-      <ul>
-        {findings.map((finding) => {
-          const key = findingKey(finding);
-          return (
-            <li key={key}>
-              {onFinding === null ? (
-                <div className="shared-finding">{entry(finding)}</div>
-              ) : (
-                <button
-                  type="button"
-                  className="shared-finding"
-                  aria-pressed={open === key}
-                  onClick={() => {
-                    setOpen(key);
-                    onFinding(finding);
-                  }}
-                >
-                  {entry(finding)}
-                </button>
-              )}
-            </li>
-          );
-        })}
-      </ul>
-    </Section>
   );
 }

@@ -2,7 +2,8 @@
 import { useState } from 'react';
 import type { Motion } from '#shared/scene';
 import { StrokeStrip } from '../ladder/stroke-strip';
-import { useLive, useOpen } from '../bench-model';
+import { useLive, useOpen, useSession } from '../bench-model';
+import { motionKey } from '../viewport/bodies';
 import { spansOf } from '../../../lib/spans';
 
 /** So many stand there at once; the rest on request. */
@@ -11,6 +12,7 @@ const FIRST = 3;
 export function MotionScrubbers() {
   const scene = useOpen((o) => o.scene);
   const findings = useLive((live) => live.findings);
+  const arc = useSession((s) => s.arc);
   const [showsAll, setShowsAll] = useState(false);
   const rank = (use: Motion['use'], hits: number, tight: number): number =>
     (hits > 0 ? 0 : tight > 0 ? 1 : 2) + (use === 'service' ? 3 : 0);
@@ -21,7 +23,8 @@ export function MotionScrubbers() {
     .map((row, place) => ({ ...row, place, rank: rank(row.motion.use, row.hits.length, row.tight.length) }))
     .sort((a, b) => a.rank - b.rank || a.place - b.place);
   if (rows.length === 0) return null;
-  const shown = showsAll ? rows : rows.slice(0, FIRST);
+  // the motion that is looked at is there in any case
+  const shown = rows.filter((row, i) => showsAll || i < FIRST || motionKey(row.component.id, row.motion.id) === arc);
   return (
     <section aria-label="Motions" className="scene-motions">
       {shown.map(({ component, motion, hits, tight }) => (
