@@ -70,6 +70,8 @@ interface RecipeSpec<P extends Specs> {
   readonly category: Category;
   readonly about: string;
   readonly frame: string;
+  /** From where its picture shows most of it; from ahead if left out. */
+  readonly seenFrom?: 'ahead' | 'behind';
   readonly params: P;
   /** What several parameters together make impossible; each alone is within its limits here. */
   readonly faults?: (p: Values<P>) => readonly Fault[];
@@ -116,6 +118,7 @@ export function defineRecipe<const P extends Specs>(spec: RecipeSpec<P>): PartRe
     category,
     about,
     frame,
+    seenFrom: spec.seenFrom ?? 'ahead',
     params,
     check: (input) => {
       const judged = judge(spec, params, input);

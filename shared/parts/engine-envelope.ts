@@ -2,7 +2,7 @@
 import type { Solid, Vec3 } from '#shared/scene';
 import { sinCosDegrees } from '#shared/units';
 import { BY_EYE, choice, defineRecipe, length, MEMORY } from './define';
-import { add, box, cylinder, rod } from './solids';
+import { add, bar, box, cylinder, rod } from './solids';
 
 const PLUGS = 4;
 
@@ -28,6 +28,14 @@ function bank(id: string, long: number, foot: Vec3, high: number, lean: number):
       );
     }),
   ];
+}
+
+const BLADES = 6;
+
+function fanBlade(i: number, hub: Vec3): Solid {
+  const [s, c] = sinCosDegrees((360 / BLADES) * i);
+  const on = (r: number): Vec3 => add(hub, [0, r * s, r * c]);
+  return bar(`fan-${i + 1}`, 'Fan blade', { wide: 60, thick: 6, flat: [1, 0.4 * c, -0.4 * s] }, on(40), on(205));
 }
 
 export const engineEnvelope = defineRecipe({
@@ -86,7 +94,8 @@ export const engineEnvelope = defineRecipe({
       cylinder('air-cleaner-lid', 'Air cleaner', 300, 8, [mid, isV ? 0 : -140, p.height - 4], 'z'),
       cylinder('crank-pulley', 'Crank pulley', 170, 50, [front - 25, 0, 0], 'x'),
       cylinder('water-pump', 'Water pump pulley', 140, 46, [front - 40, 0, deck * 0.7], 'x'),
-      cylinder('fan', 'Fan', 420, 26, [front - 105, 0, deck * 0.7], 'x'),
+      cylinder('fan-hub', 'Fan hub', 90, 30, [front - 100, 0, deck * 0.7], 'x'),
+      ...Array.from({ length: BLADES }, (_, i) => fanBlade(i, [front - 105, 0, deck * 0.7])),
       cylinder('alternator', 'Alternator', 140, 150, [front + 30, p.width * 0.36, deck * 0.95], 'x'),
       cylinder('alternator-pulley', 'Alternator pulley', 74, 30, [front - 55, p.width * 0.36, deck * 0.95], 'x'),
     ];

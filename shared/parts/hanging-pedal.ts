@@ -139,6 +139,7 @@ export const hangingPedal = defineRecipe({
   category: 'pedal',
   about: 'Brake or clutch pedal that hangs from a pivot, with its pad, push-rod clevis and whole stroke to bottom-out.',
   frame: 'Origin on the pivot’s axis, in the arm’s mid-plane. The pad hangs below; the foot pushes it forward (-X).',
+  seenFrom: 'behind',
   params: {
     armLength: length('Arm length', [150, 290, 420], 'Pivot to the middle of the pad.', MEMORY),
     clevisRadius: length(

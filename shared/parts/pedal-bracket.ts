@@ -124,6 +124,7 @@ export const pedalBracket = defineRecipe({
   about:
     'Frame for hanging pedals: plate on the firewall, cheeks, pivot shaft, and the tie to the underside of the cowl.',
   frame: 'Origin on the pivot shaft, midway between the cheeks. The plate stands ahead (-X), its front face upright.',
+  seenFrom: 'behind',
   params: {
     plateWidth: length('Plate width', [90, 230, 400], 'Across the car.', MEMORY),
     plateHeight: length('Plate height', [80, 150, 260], 'Along the firewall.', MEMORY),

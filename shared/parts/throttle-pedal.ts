@@ -11,6 +11,7 @@ export const throttlePedal = defineRecipe({
   about: 'Electronic throttle module with sensor, plug, arm and pad, swinging through its travel.',
   frame:
     'Origin on the pivot’s axis, in the arm’s mid-plane. The module’s plate stands ahead (-X); the foot pushes the pad forward.',
+  seenFrom: 'behind',
   params: {
     armLength: length('Arm length', [100, 190, 300], 'Pivot to the middle of the pad.', MEMORY),
     travel: angle('Pedal travel', [8, 17, 30], 'Swing from rest to the stop.', MEMORY),

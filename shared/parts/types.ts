@@ -64,6 +64,8 @@ export interface PartRecipe {
   readonly about: string;
   /** Where the part's origin is, and which way it looks. */
   readonly frame: string;
+  /** From where its picture shows most of it. */
+  readonly seenFrom: 'ahead' | 'behind';
   readonly params: readonly Param[];
   /** Fills in defaults and judges; lengths in the sentences are millimetres. */
   readonly check: (params: unknown) => ParamsResult;

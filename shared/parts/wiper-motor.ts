@@ -12,6 +12,7 @@ export const wiperMotor = defineRecipe({
   about: 'Motor and gearbox on their plate, with the crank turning all the way round and the link’s ball end on it.',
   frame:
     'Origin on the crank’s axis in the face that is bolted down. The gearbox lies ahead (-X), the crank behind (+X).',
+  seenFrom: 'behind',
   params: {
     motorDiameter: length('Motor diameter', [45, 64, 90], 'Of the round body.', MEMORY),
     motorLength: length('Motor length', [70, 108, 150], 'Of the round body, without the gearbox.', MEMORY),

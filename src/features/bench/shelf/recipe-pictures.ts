@@ -39,9 +39,10 @@ function sceneOf(component: Component): Scene {
   };
 }
 
-function cameraFor(box: Box): OrthographicCamera {
-  const { right, up } = pictureAxes(FROM);
-  const eye = eyeDirection(FROM);
+function cameraFor(box: Box, { seenFrom }: PartRecipe): OrthographicCamera {
+  const from = seenFrom === 'behind' ? BEHIND : AHEAD;
+  const { right, up } = pictureAxes(from);
+  const eye = eyeDirection(from);
   const middle = centreOf(box);
   const corners = cornersOf(box).map((p) => sub(p, middle));
   const reach = Math.max(...corners.flatMap((p) => [Math.abs(dot(p, right)), Math.abs(dot(p, up))])) * ROOM;
@@ -79,7 +80,7 @@ export function drawRecipes(recipes: readonly PartRecipe[]): ReadonlyMap<string,
     );
     const stage = new ThreeScene();
     stage.add(layer.root);
-    gl.render(stage, cameraFor(box));
+    gl.render(stage, cameraFor(box, recipe));
     pictures.set(recipe.kind, gl.domElement.toDataURL('image/png'));
     layer.dispose();
   }
