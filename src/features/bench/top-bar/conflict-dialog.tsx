@@ -2,11 +2,12 @@
 import type { Component, Scene } from '#shared/scene';
 import { Button } from '../../../components/button';
 import { Dialog } from '../../../components/dialog';
-import { useBench, useOpen, useSession } from '../bench-model';
+import { useBench, useFacts, useOpen, useSession } from '../bench-model';
 import { sayRecord } from './conflict-words';
 
 export function ConflictDialog() {
   const { open, session } = useBench();
+  const { display } = useFacts();
   const save = useOpen((o) => o.save);
   const isOpen = useSession((s) => s.sheet === 'conflict');
   const close = (): void => session.getState().set({ sheet: null });
@@ -37,8 +38,8 @@ export function ConflictDialog() {
           {save.records.map((record) => (
             <tr key={record}>
               <th scope="row">{nameOf(record, save.mine, save.theirs)}</th>
-              <td>{sayRecord(record, save.mine, save.theirs)}</td>
-              <td>{sayRecord(record, save.theirs, save.mine)}</td>
+              <td>{sayRecord(record, save.mine, save.theirs, display)}</td>
+              <td>{sayRecord(record, save.theirs, save.mine, display)}</td>
             </tr>
           ))}
         </tbody>

@@ -35,8 +35,8 @@ export interface RigOptions {
   readonly calm: () => boolean;
   /** Something has moved: draw. */
   readonly onMove: () => void;
-  /** A hand has taken the camera away from the standpoint it was at. */
-  readonly onTaken: () => void;
+  /** A hand has moved the camera. A square-on look that is only shifted is still the same look. */
+  readonly onTaken: (isSquare: boolean) => void;
 }
 
 interface Flight {
@@ -65,7 +65,7 @@ export function createRig({ element, calm, onMove, onTaken }: RigOptions, first:
   controls.addEventListener('change', () => {
     if (flight === null) view = readView();
     // a click that moves nothing leaves the standpoint as it is
-    if (isInHand && !view.isSquare) onTaken();
+    if (isInHand) onTaken(view.isSquare);
     onMove();
   });
   controls.addEventListener('end', () => {

@@ -8,6 +8,8 @@ export interface Running {
   readonly rig: Rig;
   /** Brings the stage in step with the stores and draws. */
   readonly refresh: () => void;
+  /** Stands anew where nobody has moved the camera since: more has come in, or the window has another shape. */
+  readonly standAnew: () => void;
 }
 
 /** Also sets what the materials need to know of the screen. */

@@ -31,6 +31,7 @@ export function StageView() {
   useLayoutEffect(() => {
     now.current = { display, area };
     running.current?.rig.resize(area);
+    running.current?.standAnew();
     running.current?.refresh();
   }, [display, area]);
 
@@ -45,9 +46,9 @@ export function StageView() {
         element: gl.domElement,
         calm: isCalm,
         onMove: invalidate,
-        onTaken: () => {
+        onTaken: (isSquare) => {
           isTaken = true;
-          if (session.getState().standpoint !== null) session.getState().set({ standpoint: null });
+          if (!isSquare && session.getState().standpoint !== null) session.getState().set({ standpoint: null });
         },
       },
       viewFrom(session.getState().standpoint ?? 'bay', zone(), now.current.area),
@@ -59,13 +60,15 @@ export function StageView() {
       stage.update(read(now.current.display));
       invalidate();
     };
-    const onMeshes = (): void => {
-      refresh();
-      // until a hand takes the camera, it makes room for what comes in
+    const standAnew = (): void => {
       const { standpoint } = session.getState();
       if (!isTaken && standpoint !== null) rig.go(viewFrom(standpoint, zone(), now.current.area), true);
     };
-    running.current = { stage, rig, refresh };
+    const onMeshes = (): void => {
+      refresh();
+      standAnew();
+    };
+    running.current = { stage, rig, refresh, standAnew };
     const detach = view.attach(
       cameraHand({
         rig,
@@ -81,7 +84,10 @@ export function StageView() {
     );
     const stops = [
       open.subscribe(refresh),
-      session.subscribe(refresh),
+      session.subscribe((s, before) => {
+        if (s.standpoint !== before.standpoint && s.standpoint !== null) isTaken = false;
+        refresh();
+      }),
       live.subscribe(refresh),
       meshes.subscribe(onMeshes),
     ];

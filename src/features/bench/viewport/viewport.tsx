@@ -1,7 +1,10 @@
 // The scene, full-bleed, with the marks that lie over it.
 import { Canvas } from '@react-three/fiber';
 import { Component, useState, type ReactNode } from 'react';
+import { inWords } from '../../../lib/part-words';
+import { useFacts, useSession } from '../bench-model';
 import { Overlay } from '../overlay/overlay';
+import { STANDPOINT_NAME } from '../standpoints/standpoints';
 import { NoViewport } from './no-viewport';
 import { StageView } from './stage-view';
 
@@ -13,9 +16,15 @@ export interface ViewportProps {
 
 export function Viewport({ antialias = true, children }: ViewportProps) {
   const [isLost, setLost] = useState(false);
+  const { words } = useFacts();
+  const standpoint = useSession((s) => s.standpoint);
+  const from = standpoint === null ? '' : `, ${inWords(STANDPOINT_NAME[standpoint], words)}`;
+  const label = `The scene in 3D${from}. Tags, tape and gaps say in words what it shows.`;
   return (
     <div className="bench-viewport">
       <Canvas
+        role="img"
+        aria-label={label}
         frameloop="demand"
         flat
         dpr={[1, 2]}

@@ -165,7 +165,7 @@ describe('the head of the bench', () => {
       within(row)
         .getAllByRole('cell')
         .map((c) => c.textContent),
-    ).toEqual(['tolerance 2 mm', 'tolerance 5 mm']);
+    ).toEqual(['tolerance 5/64"', 'tolerance 13/64"']);
     fireEvent.click(screen.getByRole('button', { name: 'Take theirs' }));
     expect(settle).toHaveBeenCalledWith('theirs');
   });

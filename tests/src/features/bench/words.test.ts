@@ -113,14 +113,14 @@ describe('a conflict', () => {
   } as typeof scene;
 
   it('says only what differs', () => {
-    expect(sayRecord('components wiper', moved, scene)).toBe('at -180 mm, 0 mm, 700 mm; tolerance 4 mm');
-    expect(sayRecord('components column', moved, scene)).toBe('the same');
+    expect(sayRecord('components wiper', moved, scene, 'mm')).toBe('at -180 mm, 0 mm, 700 mm; tolerance 4 mm');
+    expect(sayRecord('components column', moved, scene, 'mm')).toBe('the same');
   });
 
   it('says that one side deleted what the other changed', () => {
     const without = { ...scene, components: scene.components.filter((c) => c.id !== 'wiper') };
-    expect(sayRecord('components wiper', without, moved)).toBe('deleted');
-    expect(sayRecord('components wiper', moved, without)).toMatch(/^still there/);
+    expect(sayRecord('components wiper', without, moved, 'mm')).toBe('deleted');
+    expect(sayRecord('components wiper', moved, without, 'mm')).toMatch(/^still there/);
   });
 });
 
