@@ -123,7 +123,7 @@ function Actions({ bench, facts, opened, project }: ActionsProps) {
 }
 
 const Ground = ({ children }: { readonly children: ReactNode }) => (
-  <main id="main" tabIndex={-1} className="on-dye min-h-dvh">
+  <main id="main" tabIndex={-1} className="on-dye min-h-dvh bg-ground">
     <div className="mx-auto max-w-2xl px-4 py-16">{children}</div>
   </main>
 );

@@ -1,10 +1,12 @@
 // A server for the tests of the open document: it keeps the promises of the real one about saves, and its answers can be
 // lost on either way.
+import { vi } from 'vitest';
 import { applyDifference, canonicalSceneText, type Scene } from '#shared/scene';
 import type { Draft, DraftStore } from '../../../src/document/drafts';
 import { readDraft } from '../../../src/document/drafts';
 import { createOpenScene, type OpenSceneControl } from '../../../src/document/open-scene';
 import type { SaveAnswer, SaveDoor, SaveRequest } from '../../../src/document/save-door';
+import { move } from './scenes';
 
 type Weather = 'fine' | 'request lost' | 'answer lost' | 'refuses';
 
@@ -91,3 +93,8 @@ export async function sit(server: FakeServer, drawer = new Drawer(), canEdit = t
 }
 
 export const text = canonicalSceneText;
+
+export const wait = (ms: number) => vi.advanceTimersByTimeAsync(ms);
+export const state = ({ store }: OpenSceneControl) => store.getState();
+export const put = (control: OpenSceneControl, id: string, x: number): void =>
+  state(control).apply({ label: `Move ${id}`, edit: move(id, x) });
