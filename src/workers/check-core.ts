@@ -54,6 +54,9 @@ export class CheckCore {
   private readonly keys = new TaskKeys();
   private readonly meter = new GapMeter();
 
+  /** @param onFault hears of comparisons that failed; the person gets a sentence for each */
+  constructor(private readonly onFault: (error: unknown) => void = () => undefined) {}
+
   /** @param isPreview a hand is moving something, and the next document will be here before this one is done */
   take(scene: Scene, isPreview = false): void {
     this.scene = scene;
@@ -119,7 +122,8 @@ export class CheckCore {
         this.remember(next.key, finding);
         this.findings.push(finding);
         this.last.set(next.name, { finding, turn: this.turn });
-      } catch {
+      } catch (error) {
+        this.onFault(error);
         const [a, b] = [next.task.a, next.task.b].map((side) => side.component.component.name) as [string, string];
         this.troubles.push(`The gap of ${a} and ${b} could not be worked out.`);
       }

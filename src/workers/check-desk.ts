@@ -11,6 +11,8 @@ export interface DeskParts {
   readonly defer: (task: () => void) => void;
   /** ms */
   readonly now: () => number;
+  /** Hears of comparisons that failed. */
+  readonly onFault?: (error: unknown) => void;
 }
 
 /** Length of a slice of work, ms: short enough for gaps to follow a hand, long enough for motions to be in them. */
@@ -20,8 +22,8 @@ const FORGIVE_AFTER = 5000;
 /** Files read at once. */
 const AT_ONCE = 3;
 
-export function createCheckDesk({ answer, readMesh, defer, now }: DeskParts): (order: CheckOrder) => void {
-  const core = new CheckCore();
+export function createCheckDesk({ answer, readMesh, defer, now, onFault }: DeskParts): (order: CheckOrder) => void {
+  const core = new CheckCore(onFault);
   const reading = new Set<string>();
   const failedAt = new Map<string, number>();
   let order: CheckOrder | null = null;

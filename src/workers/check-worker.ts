@@ -23,5 +23,6 @@ const desk = createCheckDesk({
     bell.port2.postMessage(null);
   },
   now: () => performance.now(),
+  onFault: (error) => console.error(error),
 });
 scope.onmessage = ({ data }) => desk(data);
