@@ -13,10 +13,13 @@ import {
 import { shapeBox } from '#shared/geometry';
 import { applyRigid, composeRigid } from '#shared/units';
 import { overlapAtLeast } from './deep';
+import { gapOver, march, type MarchGround } from './march';
 import type { Span } from './report';
 
-/** Stretches of this share of the accuracy are not halved any more. */
+/** Stretches of this share of the accuracy are not divided any more. */
 const LEAF = 0.9;
+/** Stretches of at most so many such shares are walked along rather than halved. */
+const MARCH = 4096;
 
 export interface SpanQuestion {
   readonly meter: GapMeter;
@@ -88,6 +91,9 @@ export function spansBelow(q: SpanQuestion): Span[] {
     }
     return sum;
   };
+  const { meter, a, b, moving, limit } = q;
+  const ground: MarchGround = { meter, a, b, moving, limit, clearFrom: limit - q.slack + roundingOf(q.largest) };
+  const rest = { from: 0, to: 1 };
   const other = q.moving === 'a' ? q.b : q.a;
   /** Whether the gap in the middle, or the depth of an overlap there, outlasts all that moves on the way to either end. */
   const isBelowAllAlong = (middle: number, reaches: number): boolean => {
@@ -108,10 +114,8 @@ export function spansBelow(q: SpanQuestion): Span[] {
     const placed = side.solids.map((s) => ({ shape: s.shape, pose: composeRigid(move, s.pose) }));
     return overlapAtLeast(placed, other.solids, -spare) > -spare;
   };
-  const clearFrom = q.limit - q.slack + roundingOf(q.largest);
   const spans: [number, number][] = [];
   const lone: number[] = [];
-  const rest = { from: 0, to: 1 };
 
   const take = (from: number, to: number, position: number): void => {
     const before = spans.length;
@@ -120,15 +124,7 @@ export function spansBelow(q: SpanQuestion): Span[] {
   };
   const visit = (from: number, to: number): void => {
     const middle = from + (to - from) / 2;
-    const range = { from, to };
-    const near = q.meter.measure(
-      q.a,
-      q.b,
-      (lower, upper) => upper < q.limit || lower >= clearFrom,
-      q.moving === 'a' ? range : rest,
-      q.moving === 'b' ? range : rest,
-      q.limit,
-    );
+    const near = gapOver(ground, { from, to });
     if (near.upper >= q.limit) return;
     const travel = travelBetween(from, to);
     const position = near.positions[q.moving === 'a' ? 0 : 1];
@@ -137,12 +133,29 @@ export function spansBelow(q: SpanQuestion): Span[] {
       take(from, to, position);
       return;
     }
-    if (travel <= LEAF * q.accuracy || middle <= from || middle >= to) {
+    const paces = Math.ceil(travel / (LEAF * q.accuracy));
+    if (paces <= 1 || middle <= from || middle >= to) {
       take(from, to, position);
       return;
     }
-    visit(from, middle);
-    visit(middle, to);
+    if (paces > MARCH) {
+      visit(from, middle);
+      visit(middle, to);
+      return;
+    }
+    // from the hit outward to where it ends on either side; what lies beyond is another matter
+    const pace = (to - from) / paces;
+    const pacesDown = Math.ceil((position - from) / pace);
+    const pacesUp = Math.ceil((to - position) / pace);
+    const down = march(ground, position, from, pacesDown, near.witness);
+    const up = march(ground, position, to, pacesUp, near.witness);
+    if (down + 1 < pacesDown) visit(from, position - ((down + 1) / pacesDown) * (position - from));
+    take(
+      down === pacesDown ? from : position - (down / pacesDown) * (position - from),
+      up === pacesUp ? to : position + (up / pacesUp) * (to - position),
+      position,
+    );
+    if (up + 1 < pacesUp) visit(position + ((up + 1) / pacesUp) * (to - position), to);
   };
   for (let step = 0; step < n; step += 1) visit(step / n, (step + 1) / n);
   return spans.map(([from, to], i): Span => {

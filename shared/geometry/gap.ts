@@ -5,7 +5,7 @@ import { containedPoint } from './contain';
 import { displacementAt } from './path';
 import type { Triple } from './path';
 import { Searcher } from './search';
-import type { Nearest, Range, Settled, Side } from './search';
+import type { Nearest, Range, Settled, Side, Witness } from './search';
 
 export interface Gap extends Nearest {
   /** True if a part lies wholly inside another at `positions`. */
@@ -64,7 +64,13 @@ export class GapMeter {
       near.lower > 0 ? [rangeA?.from ?? 0, rangeB?.from ?? 0] : near.positions;
     const inside = findContained(A, B, positions);
     if (inside === null) return { ...near, contained: false, containedThroughout: false };
-    return { upper: 0, lower: 0, positions, ...inside, contained: true, containedThroughout: near.lower > 0 };
+    const { witness } = near;
+    return { upper: 0, lower: 0, positions, ...inside, witness, contained: true, containedThroughout: near.lower > 0 };
+  }
+
+  /** Distance of one pair of single shapes, as an earlier answer named it, at positions of the paths. */
+  distanceOf(A: Side, B: Side, witness: Witness, positions: readonly [number, number]): number {
+    return this.searcher.distanceOf(A, B, witness, positions);
   }
 }
 

@@ -6,7 +6,7 @@ export { meshExtent, meshFromSoup, meshFromStl } from './mesh';
 export type { Mesh, MeshResult } from './mesh';
 export { displacementAt, pathOf, STILL, stepTravel } from './path';
 export type { Path, PathStep, Triple } from './path';
-export type { Range, Settled, Side } from './search';
+export type { Range, Settled, Side, Witness } from './search';
 export { boxShape, cylinderShape, indexMesh, meshShape, shapeBox } from './shape';
 export type { IndexedMesh, MeshShape, Placed, Shape } from './shape';
 export { MAX_MESH_BYTES, MAX_MESH_TRIANGLES, readStl } from './stl';

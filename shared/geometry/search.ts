@@ -41,6 +41,15 @@ export interface Nearest {
   readonly points: readonly [readonly [number, number, number], readonly [number, number, number]];
   /** Which solids they are on. */
   readonly solids: readonly [number, number];
+  /** The single shapes, one of each side, that have the distance `upper`; null if nothing nearer than the limit was met. */
+  readonly witness: Witness | null;
+}
+
+/** A pair of single shapes: boxes, cylinders or triangles. */
+export interface Witness {
+  readonly solids: readonly [number, number];
+  /** Nodes of the solids' trees; 0 for a box or cylinder. */
+  readonly nodes: readonly [number, number];
 }
 
 /** Says whether bounds (mm) are close enough for the asker. */
@@ -84,7 +93,8 @@ export class Searcher {
       this.begin(stillA, stillB);
     }
     this.begin(stretchesOf(A.path, rangeA.from, rangeA.to), stretchesOf(B.path, rangeB.from, rangeB.to));
-    return { ...this.best, lower: this.walk(settled), upper: this.upper };
+    const lower = this.walk(settled);
+    return { ...this.best, lower, upper: this.upper };
   }
 
   /** Queues every pair of solids over every pair of stretches. */
@@ -182,9 +192,7 @@ export class Searcher {
   /** Exact distance of two single shapes in the middle; keeps it if it is the least so far. Returns a lower bound. */
   private measure(a: Stand, b: Stand, i: number, j: number): number {
     const out = this.answer;
-    let lower: number;
-    if (a.body.mesh !== null && b.body.mesh !== null) lower = triangleDistance(a.corners, b.corners, out);
-    else lower = this.meter.measure(convexOf(a), convexOf(b), out, CONVEX_ENOUGH);
+    const lower = this.shapesApart(a, b);
     const d = this.gauge.direction;
     d[0] = out[4]! - out[1]!;
     d[1] = out[5]! - out[2]!;
@@ -198,9 +206,27 @@ export class Searcher {
           [out[4]!, out[5]!, out[6]!],
         ],
         solids: [i, j],
+        witness: { solids: [i, j], nodes: [a.node, b.node] },
       };
     }
     return lower;
+  }
+
+  /** Distance of one pair of single shapes of two sides at positions of their paths, mm. */
+  distanceOf(A: Side, B: Side, { solids, nodes }: Witness, positions: readonly [number, number]): number {
+    const [i, j] = solids;
+    const [p, q] = positions;
+    const a = standAt(null, bodyOf(A.solids[i]!), i, nodes[0], stretchesOf(A.path, p, p)[0]!);
+    const b = standAt(null, bodyOf(B.solids[j]!), j, nodes[1], stretchesOf(B.path, q, q)[0]!);
+    this.shapesApart(a, b);
+    return this.answer[0]!;
+  }
+
+  /** Distance of two single shapes in the middle of their stretches, into `answer`; returns a lower bound. */
+  private shapesApart(a: Stand, b: Stand): number {
+    const out = this.answer;
+    if (a.body.mesh !== null && b.body.mesh !== null) return triangleDistance(a.corners, b.corners, out);
+    return this.meter.measure(convexOf(a), convexOf(b), out, CONVEX_ENOUGH);
   }
 }
 
@@ -212,6 +238,7 @@ const NOWHERE: Omit<Nearest, 'lower' | 'upper'> = {
     [0, 0, 0],
   ],
   solids: [0, 0],
+  witness: null,
 };
 
 /** The ends of a whole stroke that lie within a range, each as a stretch without length. */
