@@ -86,49 +86,53 @@ export interface Stretch {
 }
 
 const ORIGIN: Triple = [0, 0, 0];
+const REST = identityRigid();
 
-/** The stretch of step `step` between two positions of the path. */
+/** The stretch of step `step` between two positions of the path. Written out in one literal: a search makes many thousands. */
 function stretchOf(path: Path, step: number, from: number, to: number): Stretch {
   const middle = from + (to - from) / 2;
-  const base = { path, step, from, to, middle, halves: null, number: -1, poses: [], inverses: [] };
   const s = path.steps[step];
-  if (s === undefined) {
-    return {
-      ...base,
-      at: identityRigid(),
-      kind: 'still',
-      point: ORIGIN,
-      axis: ORIGIN,
-      sin: 0,
-      cos: 1,
-      chord: 0,
-      bump: 0,
-      half: 0,
-    };
+  let at: Rigid = REST;
+  let sin = 0;
+  let cos = 1;
+  let chord = 0;
+  let bump = 0;
+  let slide = 0;
+  if (s !== undefined) {
+    const n = path.steps.length;
+    at = displacement(s, valueAt(s, middle * n - step));
+    if (step > 0) at = composeRigid(at, path.befores[step]!);
+    // the part of the step's whole travel that lies on either side of the middle
+    const half = Math.abs(s.to - s.from) * n * Math.max(to - middle, middle - from);
+    if (s.kind === 'slide') slide = half;
+    else if (half >= 180) [cos, chord, bump] = [-1, 2, 2];
+    else if (half > 0) {
+      [sin, cos] = sinCosDegrees(half);
+      const [halfSin] = sinCosDegrees(half / 2);
+      // never less than the true chord; a small angle's chord is at most its arc
+      chord = 2 * halfSin;
+      bump = 2 * halfSin * halfSin;
+    }
   }
-  const n = path.steps.length;
-  const value = valueAt(s, middle * n - step);
-  const at = composeRigid(displacement(s, value), path.befores[step]!);
-  // the part of the step's whole travel that lies on either side of the middle
-  const half = Math.abs(s.to - s.from) * n * Math.max(to - middle, middle - from);
-  if (s.kind === 'slide') {
-    return { ...base, at, kind: 'slide', point: ORIGIN, axis: s.along, sin: 0, cos: 1, chord: 0, bump: 0, half };
-  }
-  const whole = half >= 180;
-  const [sin, cos] = whole ? [0, -1] : sinCosDegrees(half);
-  const [halfSin] = whole ? [1] : sinCosDegrees(half / 2);
   return {
-    ...base,
+    path,
+    step,
+    from,
+    to,
+    middle,
     at,
-    kind: 'swing',
-    point: s.point,
-    axis: s.axis,
+    kind: s === undefined ? 'still' : s.kind,
+    point: s?.kind === 'swing' ? s.point : ORIGIN,
+    axis: s === undefined ? ORIGIN : s.kind === 'swing' ? s.axis : s.along,
     sin,
     cos,
-    // never less than the true chord; a small angle's chord is at most its arc
-    chord: 2 * halfSin,
-    bump: whole ? 2 : 2 * halfSin * halfSin,
-    half: 0,
+    chord,
+    bump,
+    half: slide,
+    halves: null,
+    number: -1,
+    poses: [],
+    inverses: [],
   };
 }
 
