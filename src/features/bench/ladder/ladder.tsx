@@ -1,6 +1,7 @@
 // The right-hand side of the bench: the gap ladder, the line for all that has room, and below it the open finding.
 import { CautionLine } from '../../../components/cautions';
 import { useBench, useFacts, useLive, useOpen } from '../bench-model';
+import { useFonts } from '../overlay/use-fonts';
 import { useOpenFinding } from '../use-findings';
 import { CheckPhase } from './check-phase';
 import { FindingPanel } from './finding-panel';
@@ -12,6 +13,8 @@ export function Ladder() {
   const hasParts = useOpen((o) => o.scene.components.length > 0);
   const finding = useOpenFinding();
   const { display } = useFacts();
+  // labels that were measured before their font was there are measured anew
+  const fonts = useFonts();
   return (
     <section className="ladder" aria-labelledby="gaps-title">
       <header className="ladder-head">
@@ -33,7 +36,7 @@ export function Ladder() {
             : 'Gaps show here as soon as two parts stand on the bench.'}
         </p>
       ) : (
-        <GapLadder key={display} />
+        <GapLadder key={`${display} ${fonts}`} />
       )}
       {finding !== null && <FindingPanel finding={finding} />}
       <div className="ladder-caution">

@@ -65,7 +65,7 @@ export function widthOf(runs: readonly TextRun[], size: number, weight: number):
       if (pen !== null) pen.font = font;
       width = pen?.measureText(run.text).width ?? run.text.length * size * run.size * 0.55;
       // the font may still be on its way: what is measured before is not kept
-      if (document.fonts.status === 'loaded') widths.set(key, width);
+      if (document.fonts.check(font)) widths.set(key, width);
     }
     return sum + width;
   }, 0);

@@ -2,6 +2,7 @@
 import { useSyncExternalStore } from 'react';
 import { useBench, useFacts, useLive, useOpen, useSession, useShown } from '../bench-model';
 import { componentBox, sceneBox } from '../viewport/extent';
+import { project } from '../viewport/frame';
 import { useInsets } from '../viewport/insets';
 import { useMeshVersion } from '../viewport/use-mesh-version';
 import { useSelection } from '../use-selection';
@@ -16,6 +17,9 @@ import { scaleBar } from './scale-bar';
 import { laserTicks } from './ticks';
 import { witnessMarks } from './witness';
 import { chooseWitnesses } from './witness-choice';
+
+/** Around the handles no label is put, px. */
+const HANDLES = 56;
 
 export function Overlay() {
   const { frames, meshes } = useBench();
@@ -57,7 +61,12 @@ export function Overlay() {
     isOff: (id) => presence[id] === 'off',
   });
   const card = document.querySelector('.tape')?.getBoundingClientRect();
-  marks.push(...witnessMarks(frame, witnesses, display, room, card === undefined ? [] : [card]));
+  const foot = selection.moving.size === 0 ? null : project(frame, zeroPoint(scene, moved));
+  const blocked = [
+    ...(card === undefined ? [] : [card]),
+    ...(foot === null ? [] : [{ x: foot.x - HANDLES, y: foot.y - HANDLES, width: 2 * HANDLES, height: 1.6 * HANDLES }]),
+  ];
+  marks.push(...witnessMarks(frame, witnesses, display, room, blocked));
   if (measuredAxis !== null && selection.ids.length > 0) {
     const datum = datumFor(scene, measuredAxis, datums[measuredAxis]);
     marks.push(...measureLine(frame, datum, measuredAxis, zeroPoint(scene, moved), { display, isBare: isDragging }));

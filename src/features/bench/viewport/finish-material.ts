@@ -83,12 +83,14 @@ const FRAGMENT = /* glsl */ `
     float away = smoothstep(recede.x, recede.y, length(vToEye));
     colour = mix(colour, dye * 0.9, away * 0.55);
 
+    vec3 pace = fwidth(vWorld);
+    float grazing = 0.03 * length(pace);
     for (int i = 0; i < ${MOST_LASERS}; i++) {
       if (i >= laserCount) break;
       float d = dot(lasers[i].xyz, vWorld) - lasers[i].w;
       float step_ = fwidth(d);
       // a face that lies along the laser would be lit all over: a real line only grazes it
-      if (step_ < 1e-5) continue;
+      if (step_ < grazing) continue;
       float px = abs(d) / step_ / density;
       float core = 1.0 - smoothstep(0.55, 1.15, px);
       float bloom = exp(-px * px * 0.09) * 0.22;

@@ -21,7 +21,7 @@ export const FINISH_LOOK: Readonly<Record<Finish, FinishLook>> = {
   ghost: { gloss: 0.1, sharpness: 20, rim: 0.2 },
 };
 
-/** Sheet metal and people are seen through, so that they never hide what stands behind. */
+/** Sheet metal, people and their seats are seen through, so that they never hide what stands behind. */
 const GLASS: ReadonlySet<Category> = new Set<Category>([
   'firewall',
   'cowl',
@@ -32,6 +32,7 @@ const GLASS: ReadonlySet<Category> = new Set<Category>([
   'fender-liner',
   'hood',
   'dash',
+  'seat',
   'driver',
 ]);
 
