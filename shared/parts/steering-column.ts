@@ -5,6 +5,10 @@ import { angle, BY_EYE, choice, defineRecipe, length, MEMORY } from './define';
 import { add, box, placed, rod, times } from './solids';
 
 const RIM_PIECES = 16;
+/** Middle of the joint to the end of a yoke. */
+const JOINT_HALF = 34;
+
+const isInCabin = (p: { readonly jointAhead: number }): boolean => p.jointAhead < 0;
 
 /** The wheel's rim and spokes about the axis X, drawn in the column's own frame. */
 function wheelSolids(diameter: number, at: number): Solid[] {
@@ -35,7 +39,12 @@ export const steeringColumn = defineRecipe({
     pastFirewall: length('Tube past firewall', [10, 55, 127], 'What reaches into the engine bay.', MEMORY),
     tubeDiameter: length('Tube diameter', [40, 51, 63], '', MEMORY),
     shaftDiameter: length('Shaft diameter', [16, 19, 30], '', MEMORY),
-    jointAhead: length('Joint ahead of tube', [25, 60, 300], 'Tube’s end to the middle of the joint.', BY_EYE),
+    jointAhead: length(
+      'Joint ahead of firewall',
+      [-500, 115, 400],
+      'Along the axis, to the middle of the joint; minus is behind it, in the cabin.',
+      BY_EYE,
+    ),
     jointDiameter: length('Joint swing diameter', [30, 42, 60], 'What it sweeps as it turns.', MEMORY),
     shaftAhead: length(
       'Shaft ahead of joint',
@@ -46,14 +55,30 @@ export const steeringColumn = defineRecipe({
     wheel: choice('Wheel', { yes: 'on the column', no: 'left off' }, 'yes', 'The rim matters to knees and dash.'),
     wheelDiameter: length('Wheel diameter', [300, 380, 450], 'Outside of the rim less its thickness.', MEMORY),
   },
-  faults: (p) =>
-    p.jointDiameter < p.shaftDiameter + 8
-      ? [{ key: 'jointDiameter', message: 'Joint swing diameter must be at least 8 mm more than the shaft’s.' }]
-      : [],
+  faults: (p) => {
+    const faults = [];
+    if (p.jointDiameter < p.shaftDiameter + 8) {
+      faults.push({
+        key: 'jointDiameter',
+        message: 'Joint swing diameter must be at least 8 mm more than the shaft’s.',
+      });
+    }
+    if (!isInCabin(p) && p.jointAhead < p.pastFirewall + JOINT_HALF + 10) {
+      faults.push({
+        key: 'jointAhead',
+        message: 'Joint ahead of firewall would stand in the tube; it must be 44 mm ahead of the tube’s end.',
+      });
+    }
+    if (p.lengthBehind < 200 - p.jointAhead + JOINT_HALF) {
+      faults.push({ key: 'jointAhead', message: 'Joint ahead of firewall leaves no column behind the joint.' });
+    }
+    return faults;
+  },
   build: (p) => {
     const at = (x: number): Vec3 => [x, 0, 0];
-    const front = -p.pastFirewall;
-    const joint = front - p.jointAhead;
+    // a joint in the cabin: the tube ends behind it, and the lower shaft goes through the firewall
+    const joint = -p.jointAhead;
+    const front = isInCabin(p) ? joint + JOINT_HALF + 26 : -p.pastFirewall;
     const yoke = p.jointDiameter * 0.62;
     const end = p.lengthBehind;
     const level: Solid[] = [
@@ -77,6 +102,13 @@ export const steeringColumn = defineRecipe({
         14,
         add(at(joint), [0, 0, -p.jointDiameter / 2]),
         add(at(joint), [0, 0, p.jointDiameter / 2]),
+      ),
+      rod(
+        'joint-bolt',
+        'Joint pinch bolt',
+        10,
+        [joint + 26, -(p.jointDiameter / 2 - 4), yoke * 0.3],
+        [joint + 26, p.jointDiameter / 2 + 24, yoke * 0.3],
       ),
       ...[-1, 1].flatMap((side) => [
         box(
