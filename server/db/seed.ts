@@ -6,8 +6,13 @@ import { fileURLToPath } from 'node:url';
 import { hashPassword } from 'better-auth/crypto';
 import { eq } from 'drizzle-orm';
 import { meshNames } from '#shared/check';
+import { missingFrom, rollCall, type RollCallKey } from '#shared/review';
 import { loadScene, type Scene } from '#shared/scene';
 import { readConfig, type Config } from '../config';
+import { askForDryFit } from '../dry-fits/rules';
+import { jobs } from '../jobs/jobs';
+import { askForDryFit } from '../dry-fits/rules';
+import { jobs } from '../jobs/jobs';
 import { guessUnit, judgeFile, meshKey } from '../meshes/rules';
 import { noteActivity } from '../projects/rules';
 import { createFileStore, type FileStore } from '../storage/file-store';
@@ -24,8 +29,10 @@ interface DemoProject {
   readonly car: string;
   readonly display: 'mm' | 'in' | 'in-decimal';
   readonly notes: string;
-  readonly notOnThisCar: readonly string[];
+  readonly notOnThisCar: readonly RollCallKey[];
   readonly scenes: readonly string[];
+  /** The scenes that have been checked already. */
+  readonly dryFits: readonly string[];
 }
 
 async function seedPeople(tx: Transaction): Promise<{ teamId: string; ids: Record<string, string> }> {
@@ -100,7 +107,7 @@ async function seedProject(
   ids: Record<string, string>,
 ): Promise<void> {
   const facts = JSON.parse(await readFile(path.join(DEMO, 'demo.json'), 'utf8')) as DemoProject;
-  const { scenes, notOnThisCar, ...rest } = facts;
+  const { scenes, dryFits, notOnThisCar, ...rest } = facts;
   const [made] = await tx
     .insert(project)
     .values({ teamId, ...rest, notOnThisCar: [...notOnThisCar] })
@@ -116,15 +123,20 @@ async function seedProject(
       if (!hashes.has(name)) hashes.set(name, await seedMesh(tx, store, config.files, teamId, name, designer));
     }
     const document = withHashes(loaded.scene, hashes);
-    await tx.insert(scene).values({
-      projectId: made!.id,
-      name: document.name,
-      document,
-      parts: document.components.length,
-      meshes: meshNames(document),
-      updatedBy: designer,
-    });
+    const [placed] = await tx
+      .insert(scene)
+      .values({
+        projectId: made!.id,
+        name: document.name,
+        document,
+        parts: document.components.length,
+        meshes: meshNames(document),
+        updatedBy: designer,
+      })
+      .returning({ sceneId: scene.id, saveNumber: scene.saveNumber });
     await noteActivity(tx, made!.id, designer, `made the scene “${document.name}”`);
+    // a finished layout has its dry fit, which the server works out as soon as it runs; one under way has none yet
+    if (missingFrom(rollCall(document, notOnThisCar)).length === 0) await askForDryFit(tx, jobs, placed!, designer);
   }
 }
 

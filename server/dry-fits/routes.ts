@@ -6,9 +6,8 @@ import { tables } from '../db/client';
 import { ApiError } from '../http/api-error';
 import { mount } from '../http/mount';
 import type { Services } from '../http/services';
-import { noteActivity } from '../projects/rules';
 import { freeze } from '../scenes/rules';
-import { findDryFit, findRevision, listDryFitsOf, listPictures } from './rules';
+import { askForDryFit, findDryFit, findRevision, listDryFitsOf, listPictures } from './rules';
 
 const { dryFit } = tables;
 
@@ -16,29 +15,8 @@ export function dryFitRoutes(router: Router, services: Services): void {
   const { db, jobs } = services;
 
   mount(router, services, runDryFit, async ({ params, body, person }) => {
-    const id = await db.transaction(async (tx) => {
-      const frozen = await freeze(tx, params.sceneId, body.saveNumber, person.id);
-      if (frozen.scene.components.length < 2) throw new ApiError('scene/empty');
-      const [waiting] = await tx
-        .select({ id: dryFit.id })
-        .from(dryFit)
-        .where(and(eq(dryFit.revisionId, frozen.revisionId), inArray(dryFit.state, ['queued', 'running'])))
-        .limit(1);
-      // pressed twice: the one under way is the answer to both
-      if (waiting !== undefined) return waiting.id;
-      const [made] = await tx
-        .insert(dryFit)
-        .values({ sceneId: params.sceneId, revisionId: frozen.revisionId, startedBy: person.id })
-        .returning({ id: dryFit.id });
-      await jobs.add(tx, 'dry-fit', { dryFitId: made!.id }, { key: `dry-fit-${made!.id}` });
-      await noteActivity(
-        tx,
-        frozen.row.projectId,
-        person.id,
-        `ran a dry fit of “${frozen.row.name}”, revision ${frozen.number}`,
-      );
-      return made!.id;
-    });
+    const seen = { sceneId: params.sceneId, saveNumber: body.saveNumber };
+    const id = await db.transaction((tx) => askForDryFit(tx, jobs, seen, person.id));
     return findDryFit(db, id);
   });
 

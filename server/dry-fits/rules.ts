@@ -1,12 +1,45 @@
-// Dry fits and revisions as others see them.
-import { and, desc, eq, sql } from 'drizzle-orm';
+// Dry fits and revisions: how one is asked for, and how others see them.
+import { and, desc, eq, inArray, sql } from 'drizzle-orm';
 import type { DryFit, Picture } from '#shared/api';
-import { tables, type Queryable } from '../db/client';
+import { tables, type Queryable, type Transaction } from '../db/client';
 import { ApiError } from '../http/api-error';
+import type { Jobs } from '../jobs/jobs';
+import { noteActivity } from '../projects/rules';
+import { freeze } from '../scenes/rules';
 
 const { dryFit, picture, project, revision, scene, user } = tables;
 
 const LEFT = 'somebody who has left';
+
+/** Freezes the scene as it was seen and puts its dry fit in the queue; gives the dry fit's id. */
+export async function askForDryFit(
+  tx: Transaction,
+  jobs: Jobs,
+  seen: { readonly sceneId: string; readonly saveNumber: number },
+  personId: string,
+): Promise<string> {
+  const frozen = await freeze(tx, seen.sceneId, seen.saveNumber, personId);
+  if (frozen.scene.components.length < 2) throw new ApiError('scene/empty');
+  const [waiting] = await tx
+    .select({ id: dryFit.id })
+    .from(dryFit)
+    .where(and(eq(dryFit.revisionId, frozen.revisionId), inArray(dryFit.state, ['queued', 'running'])))
+    .limit(1);
+  // pressed twice: the one under way is the answer to both
+  if (waiting !== undefined) return waiting.id;
+  const [made] = await tx
+    .insert(dryFit)
+    .values({ sceneId: seen.sceneId, revisionId: frozen.revisionId, startedBy: personId })
+    .returning({ id: dryFit.id });
+  await jobs.add(tx, 'dry-fit', { dryFitId: made!.id }, { key: `dry-fit-${made!.id}` });
+  await noteActivity(
+    tx,
+    frozen.row.projectId,
+    personId,
+    `ran a dry fit of “${frozen.row.name}”, revision ${frozen.number}`,
+  );
+  return made!.id;
+}
 
 async function selectDryFits(db: Queryable, where: ReturnType<typeof eq>, limit: number): Promise<DryFit[]> {
   const rows = await db
