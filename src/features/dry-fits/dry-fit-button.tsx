@@ -51,11 +51,20 @@ export function DryFitButton({ sceneId, saveNumber, saveNow, canRun, quiet = fal
   return (
     <>
       {done !== null && (
-        <ButtonLink kind={isCurrent ? 'main' : 'plain'} to={`/revisions/${done.revisionId}/report`}>
+        <ButtonLink
+          kind={isCurrent ? 'main' : 'plain'}
+          className={isCurrent ? undefined : 'max-sm:hidden'}
+          to={`/revisions/${done.revisionId}/report`}
+        >
           Report {done.number}
         </ButtonLink>
       )}
-      <Button kind={isCurrent ? 'plain' : 'main'} busy={run.isPending} onClick={start}>
+      <Button
+        kind={isCurrent ? 'plain' : 'main'}
+        className={isCurrent ? 'max-sm:hidden' : undefined}
+        busy={run.isPending}
+        onClick={start}
+      >
         {run.isPending ? 'Saving' : 'Run dry fit'}
       </Button>
     </>

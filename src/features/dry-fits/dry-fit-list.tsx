@@ -36,7 +36,7 @@ export function DryFitList({ sceneId, mayRun }: DryFitListProps) {
           </p>
         </div>
       )}
-      <FormFault text={run.isError ? sayProblem(run.error) : null} />
+      <div className="mb-4 empty:hidden">{run.isError && <FormFault text={sayProblem(run.error)} />}</div>
       {dryFits.isPending && <LoadingState what="the dry fits" />}
       {dryFits.isError && <ErrorState {...tell(dryFits.error)} onRetry={() => void dryFits.refetch()} />}
       {isNone && (

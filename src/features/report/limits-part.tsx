@@ -15,7 +15,7 @@ export function LimitsPart({ model: { scene, report } }: { readonly model: Repor
   if (sheets.length === 0 && unchecked.length === 0) return null;
   return (
     <Section title="What was not checked">
-      <div className="grid gap-5 sm:grid-cols-2">
+      <div className="grid gap-5">
         {sheets.length > 0 && (
           <div>
             <h3 className="font-bold">Taken as open surfaces</h3>
@@ -40,7 +40,7 @@ export function LimitsPart({ model: { scene, report } }: { readonly model: Repor
             <p className="mt-0.5 text-sm text-soft">
               A pedal turns in its own bracket. These pairs are checked at rest only: move them through by hand.
             </p>
-            <ul className="report-plain">
+            <ul className="report-plain report-pairs">
               {unchecked.map(([a, b]) => (
                 <li key={`${a}|${b}`}>
                   {nameOf(scene, a)}, {nameOf(scene, b)}

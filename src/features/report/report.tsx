@@ -5,6 +5,7 @@ import { Button, ButtonLink } from '../../components/button';
 import { Cautions } from '../../components/cautions';
 import { Breadcrumbs, type Crumb } from '../../components/page-head';
 import { When } from '../../components/when';
+import { formatWhenFully } from '../../lib/format';
 import type { WordChoice } from '../../lib/part-words';
 import { inWords } from '../../lib/part-words';
 import { ChangedNotice } from './changed-notice';
@@ -29,6 +30,7 @@ export interface ReportProps {
 export function Report({ model, display, words, crumbs, pictures, children }: ReportProps) {
   const { revision, scene, report } = model;
   const { dryFit } = revision;
+  const at = dryFit?.endedAt ?? revision.createdAt;
   usePrintedWhole();
   return (
     <article className="report">
@@ -43,8 +45,12 @@ export function Report({ model, display, words, crumbs, pictures, children }: Re
             <span className="ml-2 font-normal text-soft">interference report</span>
           </h1>
           <p className="text-sm text-soft">
-            dry fit of {dryFit !== null && <When iso={dryFit.endedAt ?? dryFit.createdAt} />} by{' '}
-            {dryFit?.startedBy ?? revision.madeBy}
+            dry fit of{' '}
+            <span className="print:hidden">
+              <When iso={at} />
+            </span>
+            {/* on paper "today" is soon wrong */}
+            <span className="hidden print:inline">{formatWhenFully(at)}</span> by {dryFit?.startedBy ?? revision.madeBy}
           </p>
         </div>
         <div className="no-print flex flex-wrap items-center gap-3">

@@ -24,8 +24,15 @@ export function PictureButton({ canTake, dryFit, ...source }: PictureButtonProps
   };
   return (
     <>
-      <Button busy={take.isPending} onClick={start}>
-        {take.isPending ? 'Drawing' : 'Take picture'}
+      <Button busy={take.isPending} aria-label="Take picture" onClick={start}>
+        {take.isPending ? (
+          'Drawing'
+        ) : (
+          <>
+            <span className="max-sm:hidden">Take picture</span>
+            <span className="sm:hidden">Picture</span>
+          </>
+        )}
       </Button>
       <Dialog
         open={isOpen}
