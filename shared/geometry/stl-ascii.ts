@@ -2,7 +2,7 @@
 // indentation. Normals are not used for anything and may be wrong or missing; corners may not.
 import type { StlResult } from './stl';
 
-type Word = 'solid' | 'facet' | 'outer' | 'loop' | 'vertex' | 'endloop' | 'endfacet' | 'endsolid';
+type Word = 'solid' | 'facet' | 'normal' | 'outer' | 'loop' | 'vertex' | 'endloop' | 'endfacet' | 'endsolid';
 
 const refuse = (reason: string): StlResult => ({ ok: false, reason });
 const isBlank = (c: number): boolean => c <= 0x20;
@@ -31,19 +31,37 @@ class Tokens {
     this.at = i;
     return this.end > this.start;
   }
-  /** Passes over the rest of the line; false if the file has no further line end (all in one line). */
-  skipLine(): boolean {
+  /** Moves to the next token of the same line; false, and nowhere, if the line ends before. */
+  nextOnLine(): boolean {
     const { bytes } = this;
     for (let i = this.at; i < bytes.length; i += 1) {
-      if (isLineEnd(bytes[i]!)) {
-        this.at = i;
-        return true;
-      }
+      if (isLineEnd(bytes[i]!)) return false;
+      if (!isBlank(bytes[i]!)) return this.next();
     }
     return false;
   }
-  skipToEnd(): void {
-    this.at = this.bytes.length;
+  /** True if the token is `facet` and the one after it, on the same line, is `normal`. */
+  beginsFacet(): boolean {
+    if (!this.is('facet')) return false;
+    const { at, start, end } = this;
+    const begins = this.nextOnLine() && this.is('normal');
+    [this.at, this.start, this.end] = [at, start, end];
+    return begins;
+  }
+  /** True if a facet begins on what is left of the line. */
+  hasFacetOnLine(): boolean {
+    const { at, start, end } = this;
+    let has = false;
+    while (!has && this.nextOnLine()) has = this.beginsFacet();
+    [this.at, this.start, this.end] = [at, start, end];
+    return has;
+  }
+  /** True if no line ends in what is left of the file. */
+  isLastLine(): boolean {
+    const { bytes } = this;
+    let i = this.at;
+    while (i < bytes.length && !isLineEnd(bytes[i]!)) i += 1;
+    return i === bytes.length;
   }
   is(word: Word): boolean {
     if (this.end - this.start !== word.length) return false;
@@ -123,19 +141,31 @@ function readFacet(tokens: Tokens, corners: Corners, facet: number): string | nu
   return null;
 }
 
+/** Passes over the name after `solid`, which runs to the end of the line or to a facet; false at the end of the file. */
+function passName(tokens: Tokens): boolean {
+  const isLast = tokens.isLastLine();
+  while (tokens.nextOnLine()) if (tokens.beginsFacet() || (isLast && tokens.is('endsolid'))) return true;
+  return tokens.next();
+}
+
+/** Passes over the name after `endsolid`; true if another solid begins on the same line (then its word is the token). */
+function passEndName(tokens: Tokens): boolean {
+  const hasMore = tokens.hasFacetOnLine();
+  while (tokens.nextOnLine()) if (hasMore && (tokens.is('solid') || tokens.is('facet'))) return true;
+  return false;
+}
+
 /** Reads STL text; see readStl. `maxTriangles` is the most it takes before it refuses. */
 export function readAsciiStl(bytes: Uint8Array, maxTriangles: number): StlResult {
   const tokens = new Tokens(bytes);
   const corners = new Corners();
   let facets = 0;
-  while (tokens.next()) {
+  let isAtSolid = false;
+  while (isAtSolid || tokens.next()) {
     if (!tokens.is('solid')) {
       return refuse(`line ${tokens.line}: "solid" or the end of the file was expected, not "${tokens.text()}"`);
     }
-    // the name runs to the end of the line; in a file of one single line it ends at the first facet
-    const named = tokens.skipLine();
-    let more = tokens.next();
-    while (!named && more && !tokens.is('facet') && !tokens.is('endsolid')) more = tokens.next();
+    let more = passName(tokens);
     for (;;) {
       if (!more) return refuse('"endsolid" is missing: the file is truncated');
       if (tokens.is('endsolid')) break;
@@ -148,7 +178,7 @@ export function readAsciiStl(bytes: Uint8Array, maxTriangles: number): StlResult
       if (fault !== null) return refuse(fault);
       more = tokens.next();
     }
-    if (!tokens.skipLine()) tokens.skipToEnd();
+    isAtSolid = passEndName(tokens);
   }
   if (facets === 0) return refuse('the file holds no triangle');
   return { ok: true, soup: corners.take(), form: 'text' };
