@@ -6,11 +6,8 @@ import { fileURLToPath } from 'node:url';
 import { hashPassword } from 'better-auth/crypto';
 import { eq } from 'drizzle-orm';
 import { meshNames } from '#shared/check';
-import { missingFrom, rollCall, type RollCallKey } from '#shared/review';
 import { loadScene, type Scene } from '#shared/scene';
 import { readConfig, type Config } from '../config';
-import { askForDryFit } from '../dry-fits/rules';
-import { jobs } from '../jobs/jobs';
 import { askForDryFit } from '../dry-fits/rules';
 import { jobs } from '../jobs/jobs';
 import { guessUnit, judgeFile, meshKey } from '../meshes/rules';
@@ -29,9 +26,9 @@ interface DemoProject {
   readonly car: string;
   readonly display: 'mm' | 'in' | 'in-decimal';
   readonly notes: string;
-  readonly notOnThisCar: readonly RollCallKey[];
+  readonly notOnThisCar: readonly string[];
   readonly scenes: readonly string[];
-  /** The scenes that have been checked already. */
+  /** Those of the scenes that have a dry fit. */
   readonly dryFits: readonly string[];
 }
 
@@ -135,8 +132,8 @@ async function seedProject(
       })
       .returning({ sceneId: scene.id, saveNumber: scene.saveNumber });
     await noteActivity(tx, made!.id, designer, `made the scene “${document.name}”`);
-    // a finished layout has its dry fit, which the server works out as soon as it runs; one under way has none yet
-    if (missingFrom(rollCall(document, notOnThisCar)).length === 0) await askForDryFit(tx, jobs, placed!, designer);
+    // asked for as a person does; the server works it out as soon as it runs
+    if (dryFits.includes(file)) await askForDryFit(tx, jobs, placed!, designer);
   }
 }
 
