@@ -6,6 +6,7 @@ import { fileURLToPath } from 'node:url';
 import { hashPassword } from 'better-auth/crypto';
 import { eq } from 'drizzle-orm';
 import { meshNames } from '#shared/check';
+import { missingFrom, rollCall, type RollCallKey } from '#shared/review';
 import { loadScene, type Scene } from '#shared/scene';
 import { readConfig, type Config } from '../config';
 import { askForDryFit } from '../dry-fits/rules';
@@ -26,10 +27,8 @@ interface DemoProject {
   readonly car: string;
   readonly display: 'mm' | 'in' | 'in-decimal';
   readonly notes: string;
-  readonly notOnThisCar: readonly string[];
+  readonly notOnThisCar: readonly RollCallKey[];
   readonly scenes: readonly string[];
-  /** Those of the scenes that have a dry fit. */
-  readonly dryFits: readonly string[];
 }
 
 async function seedPeople(tx: Transaction): Promise<{ teamId: string; ids: Record<string, string> }> {
@@ -104,7 +103,7 @@ async function seedProject(
   ids: Record<string, string>,
 ): Promise<void> {
   const facts = JSON.parse(await readFile(path.join(DEMO, 'demo.json'), 'utf8')) as DemoProject;
-  const { scenes, dryFits, notOnThisCar, ...rest } = facts;
+  const { scenes, notOnThisCar, ...rest } = facts;
   const [made] = await tx
     .insert(project)
     .values({ teamId, ...rest, notOnThisCar: [...notOnThisCar] })
@@ -132,8 +131,8 @@ async function seedProject(
       })
       .returning({ sceneId: scene.id, saveNumber: scene.saveNumber });
     await noteActivity(tx, made!.id, designer, `made the scene “${document.name}”`);
-    // asked for as a person does; the server works it out as soon as it runs
-    if (dryFits.includes(file)) await askForDryFit(tx, jobs, placed!, designer);
+    // a finished layout has its dry fit, which the server works out as soon as it runs; one under way has none yet
+    if (missingFrom(rollCall(document, notOnThisCar)).length === 0) await askForDryFit(tx, jobs, placed!, designer);
   }
 }
 
