@@ -4,7 +4,7 @@ import { copyFile, mkdir, readFile } from 'node:fs/promises';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { hashPassword } from 'better-auth/crypto';
-import { eq } from 'drizzle-orm';
+import { eq, sql } from 'drizzle-orm';
 import { meshNames } from '#shared/check';
 import { missingFrom, rollCall, type RollCallKey } from '#shared/review';
 import { loadScene, type Scene } from '#shared/scene';
@@ -128,6 +128,9 @@ async function seedProject(
         parts: document.components.length,
         meshes: meshNames(document),
         updatedBy: designer,
+        // lists are in the order of time, and the transaction has one time for all
+        createdAt: sql`clock_timestamp()`,
+        updatedAt: sql`clock_timestamp()`,
       })
       .returning({ sceneId: scene.id, saveNumber: scene.saveNumber });
     await noteActivity(tx, made!.id, designer, `made the scene “${document.name}”`);

@@ -1,10 +1,13 @@
 // The diary of a project: one line for each thing that somebody did.
-import { and, eq, gt } from 'drizzle-orm';
+import { and, eq, gt, sql } from 'drizzle-orm';
 import { tables, type Queryable } from '../db/client';
 
 /** Writes a line; inside the transaction of the deed itself. `what` reads on from the person's name. */
 export async function noteActivity(db: Queryable, projectId: string, personId: string, what: string): Promise<void> {
-  await db.insert(tables.activity).values({ projectId, personId, what: what.slice(0, 400) });
+  // not the transaction's time, which several lines of one transaction would share
+  await db
+    .insert(tables.activity)
+    .values({ projectId, personId, what: what.slice(0, 400), at: sql`clock_timestamp()` });
 }
 
 /** As noteActivity, but a line that says the same as one of the last half hour is left out. */
