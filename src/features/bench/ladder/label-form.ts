@@ -14,8 +14,8 @@ export const LABEL_HEIGHT: Readonly<Record<LabelForm, number>> = { line: 26, pai
 const NAME = 13;
 const WORD = 12;
 const LENGTH = 17;
-/** Mark, gaps and padding around the words. */
-const AROUND = 43;
+/** Mark, gaps and padding around the words, and a little that measuring may be off by. */
+const AROUND = 54;
 /** The arrow of what is deeper than the rule. */
 const DEEPER = 18;
 
