@@ -49,5 +49,4 @@ export const DEMO_PROJECT = {
     'Hydraulic brakes and clutch on a hanging pedal box over the column. Measured level at ride height, doors and hood hung.',
   notOnThisCar: ['booster'],
   scenes: Object.keys(DEMO_SCENES),
-  dryFits: ['box-beside-column.json', 'first-try.json'],
 } as const;
