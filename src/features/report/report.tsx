@@ -10,6 +10,7 @@ import type { WordChoice } from '../../lib/part-words';
 import { inWords } from '../../lib/part-words';
 import { ChangedNotice } from './changed-notice';
 import { FindingsPart } from './findings-part';
+import { GapChartPart } from './gap-chart-part';
 import { LimitsPart } from './limits-part';
 import { Opening } from './opening';
 import type { ReportModel } from './report-model';
@@ -69,6 +70,7 @@ export function Report({ model, display, words, crumbs, pictures, children }: Re
       <Opening model={model} display={display} />
       <RollCallPart model={model} display={display} say={(text) => inWords(text, words)} />
       <LimitsPart model={model} />
+      <GapChartPart model={model} display={display} />
       <PictureProgress pictures={pictures} />
       <FindingsPart model={model} display={display} words={words} pictureOf={pictures.of} />
       {children}

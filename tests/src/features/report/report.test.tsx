@@ -2,7 +2,7 @@
 import { QueryClient, QueryClientProvider } from '@tanstack/react-query';
 import { cleanup, fireEvent, render, screen, within } from '@testing-library/react';
 import { MemoryRouter } from 'react-router-dom';
-import { afterEach, describe, expect, it } from 'vitest';
+import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { Finding, Report as ReportFile } from '#shared/check';
 import { CAUTIONS } from '#shared/review';
 import { canonicalSceneText, type Scene } from '#shared/scene';
@@ -13,7 +13,12 @@ import { readRevisionReport } from '../../../../src/features/report/report-model
 import type { FindingPictures } from '../../../../src/features/report/use-finding-pictures';
 import { finding, smallScene } from '../bench/support';
 
-afterEach(cleanup);
+// what is in the cache is all there is to know
+beforeEach(() => vi.stubGlobal('fetch', () => new Promise(() => undefined)));
+afterEach(() => {
+  cleanup();
+  vi.unstubAllGlobals();
+});
 
 const hit: Finding = finding('brake-pedal', 'column', 'hits', {
   motions: [{ component: 'brake-pedal', motion: 'stroke' }],
