@@ -1,5 +1,5 @@
-// The distance between two triangles, exact up to rounding: the least over nine pairs of edges, six corners against
-// faces, and zero where an edge passes through a face. Degenerate triangles (corners in a line) are handled as their
+// The distance between two triangles, up to rounding: the least over nine pairs of edges, six corners against
+// faces, and zero where an edge passes through a face. Degenerate triangles (corners all but in a line) are handled as their
 // edges.
 // Segments: C. Ericson, Real-Time Collision Detection (2005), 5.1.9, with the near-parallel case taken from the cross
 // product, which keeps the error of the distance at rounding of the coordinates; corner against face: ibid. 5.1.5.
@@ -106,7 +106,7 @@ export function segmentDistance(P: Float64Array, Q: Float64Array, out: PairAnswe
   return (out[0] = Math.sqrt(out[0]));
 }
 
-/** The six heights of one triangle's corners over the other's plane, unscaled; scratch of one call. */
+/** A triangle's normal, unscaled, and its square. */
 interface Plane {
   nx: number;
   ny: number;
@@ -114,17 +114,39 @@ interface Plane {
   nn: number;
 }
 
+/**
+ * Triangles flatter than this (sine of the angle between the two shorter edges) are handled as their edges: the plane of
+ * three corners that all but stand in a line is noise, and the face reaches no farther than this share of its length.
+ */
+const FLAT = 1e-8;
+/** Likewise where the two shorter edges are below this, mm. */
+const TINY = 1e-12;
+
+/** The plane of a triangle, from its two shorter edges; `nn` is 0 if it is too flat to have one. */
 function planeOf(T: Float64Array): Plane {
-  const ux = T[3]! - T[0]!;
-  const uy = T[4]! - T[1]!;
-  const uz = T[5]! - T[2]!;
-  const vx = T[6]! - T[0]!;
-  const vy = T[7]! - T[1]!;
-  const vz = T[8]! - T[2]!;
+  const ax = T[3]! - T[0]!;
+  const ay = T[4]! - T[1]!;
+  const az = T[5]! - T[2]!;
+  const bx = T[6]! - T[3]!;
+  const by = T[7]! - T[4]!;
+  const bz = T[8]! - T[5]!;
+  const cx = T[0]! - T[6]!;
+  const cy = T[1]! - T[7]!;
+  const cz = T[2]! - T[8]!;
+  const aa = ax * ax + ay * ay + az * az;
+  const bb = bx * bx + by * by + bz * bz;
+  const cc = cx * cx + cy * cy + cz * cz;
+  // edges one after another, whichever two: their product has the same sense
+  const first = aa >= bb && aa >= cc ? 1 : bb >= cc ? 2 : 0;
+  const [ux, uy, uz, vx, vy, vz] =
+    first === 1 ? [bx, by, bz, cx, cy, cz] : first === 2 ? [cx, cy, cz, ax, ay, az] : [ax, ay, az, bx, by, bz];
   const nx = uy * vz - uz * vy;
   const ny = uz * vx - ux * vz;
   const nz = ux * vy - uy * vx;
-  return { nx, ny, nz, nn: nx * nx + ny * ny + nz * nz };
+  const nn = nx * nx + ny * ny + nz * nz;
+  const [uu, vv] = first === 1 ? [bb, cc] : first === 2 ? [cc, aa] : [aa, bb];
+  const isFlat = nn <= FLAT * FLAT * uu * vv || Math.min(uu, vv) <= TINY * TINY;
+  return { nx, ny, nz, nn: isFlat ? 0 : nn };
 }
 
 const height = (T: Float64Array, n: Plane, x: number, y: number, z: number): number =>
