@@ -29,7 +29,13 @@ export async function askForDryFit(
   if (waiting !== undefined) return waiting.id;
   const [made] = await tx
     .insert(dryFit)
-    .values({ sceneId: seen.sceneId, revisionId: frozen.revisionId, startedBy: personId })
+    .values({
+      sceneId: seen.sceneId,
+      revisionId: frozen.revisionId,
+      startedBy: personId,
+      // the latest counts, and several may be asked for in one transaction
+      createdAt: sql`clock_timestamp()`,
+    })
     .returning({ id: dryFit.id });
   await jobs.add(tx, 'dry-fit', { dryFitId: made!.id }, { key: `dry-fit-${made!.id}` });
   await noteActivity(

@@ -137,5 +137,7 @@ describe('the dry fits that the seed asks for', () => {
     const pairs = new Set(conflicts!.findings.filter((f) => f.verdict === 'hits').map((f) => f.between.join(' ')));
     expect(pairs.size).toBe(5);
     expect(conflicts!.totals).toMatchObject({ tight: 0, loose: 0 });
+    // the project shows its latest: the layout with the conflicts
+    expect(done.at(-1)!.sceneId).toBe(scenes[1]!.id);
   });
 });
