@@ -28,7 +28,7 @@ export function GapChartPart({ model: { scene, report, revision }, display }: Ga
   return (
     <Section
       title="Gap chart"
-      note={`${UNIT[display]}, the worst of each pair over every motion`}
+      note={`${UNIT[display]}, the worst of each pair over every motion; where it hits, how deep`}
       actions={
         (left > 0 || showsAll) && (
           <Button kind="text" size="small" className="no-print" onClick={() => setShowsAll(!showsAll)}>
@@ -37,7 +37,7 @@ export function GapChartPart({ model: { scene, report, revision }, display }: Ga
         )
       }
     >
-      <div className="gap-chart-run" role="region" aria-label="Gap chart" tabIndex={0}>
+      <div className="gap-chart-run" role="group" aria-label="Pairs of parts" tabIndex={0}>
         <table className="gap-chart">
           <thead className="sr-only">
             <tr>
