@@ -77,7 +77,7 @@ export function sceneOf(
   name: string,
   parts: { readonly groups: Scene['groups']; readonly components: readonly Component[] },
   rules: readonly PairRule[],
-  columnAcross: number,
+  lasers: Scene['lasers'],
 ): Scene {
   const start = newScene(name, 'in');
   const present = new Set(parts.components.map((c) => c.id));
@@ -85,10 +85,7 @@ export function sceneOf(
     rule.between.every((side) => !('component' in side) || present.has(side.component));
   return {
     ...start,
-    lasers: [
-      { id: 'column-line', name: 'Column line', point: [0, columnAcross, 0], normal: [0, 1, 0] },
-      ...start.lasers,
-    ],
+    lasers: [...lasers, ...start.lasers],
     groups: parts.groups,
     components: parts.components,
     rules: { ...start.rules, pairs: [...start.rules.pairs, ...rules.filter(holds)] },

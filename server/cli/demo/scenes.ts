@@ -1,7 +1,7 @@
 // The demo's three scenes: one that clears, one with five conflicts, one that is being laid out.
 import { pairKey, type Scene } from '#shared/scene';
 import { joint, sceneOf } from './draw';
-import { COLUMN_ACROSS, JOINTS, zone, type ZoneChoices } from './zone';
+import { JOINTS, LASERS, zone, type ZoneChoices } from './zone';
 
 const CLEAR: ZoneChoices = {
   clutchCylinderLength: 140,
@@ -31,12 +31,12 @@ function inProgress(): Scene {
   const components = all.components.filter((c) => !NOT_YET.has(c.id));
   // the bracket hangs on the firewall alone so far
   const joints = JOINTS.filter((rule) => pairKey(rule) !== pairKey(joint('pedal-bracket', 'cowl')));
-  return sceneOf('Second layout, under way', { groups: all.groups, components }, joints, COLUMN_ACROSS);
+  return sceneOf('Second layout, under way', { groups: all.groups, components }, joints, LASERS);
 }
 
 export const DEMO_SCENES: Readonly<Record<string, () => Scene>> = {
-  'box-beside-column.json': () => sceneOf('Box over the column, clear', zone(CLEAR), JOINTS, COLUMN_ACROSS),
-  'first-try.json': () => sceneOf('First try, five conflicts', zone(CONFLICTS), JOINTS, COLUMN_ACROSS),
+  'box-beside-column.json': () => sceneOf('Box over the column, clear', zone(CLEAR), JOINTS, LASERS),
+  'first-try.json': () => sceneOf('First try, five conflicts', zone(CONFLICTS), JOINTS, LASERS),
   'under-way.json': inProgress,
 };
 

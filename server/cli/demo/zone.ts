@@ -2,11 +2,12 @@
 // x = 0. What the three scenes differ in comes as choices.
 import { FORK_LENGTH, pedalTravel, type Params } from '#shared/parts';
 import type { Component, PairRule, Scene, Vec3 } from '#shared/scene';
+import { sinCosDegrees } from '#shared/units';
 import { block, drum, joint, plainPart, readyMade, scanned } from './draw';
 
 const RAKE = 9;
 /** The column's line, and the middle of the pedal box on it. */
-export const COLUMN_ACROSS = 400;
+const COLUMN_ACROSS = 400;
 const FIREWALL_LOW = 60;
 const COWL_UNDER = 702.2;
 const PIVOT_DEPTH = 155;
@@ -19,6 +20,18 @@ const tenth = (x: number): number => Math.round(x * 10) / 10;
 /** The x of a place `behind` the firewall's rear face, square to it, at a height. */
 const behindFirewall = (behind: number, z: number): number =>
   tenth((behind + (z - FIREWALL_LOW) * Math.sin(radians(RAKE))) / Math.cos(radians(RAKE)));
+
+const [RAKE_SINE, RAKE_COSINE] = sinCosDegrees(RAKE);
+/** What the laser throws on this car, besides the centre and the floor that every scene has. */
+export const LASERS: Scene['lasers'] = [
+  { id: 'column-line', name: 'Column line', point: [0, COLUMN_ACROSS, 0], normal: [0, 1, 0] },
+  {
+    id: 'firewall-plane',
+    name: 'Firewall plane',
+    point: [0, 0, FIREWALL_LOW],
+    normal: [RAKE_COSINE, 0, -RAKE_SINE],
+  },
+];
 
 export interface ZoneChoices {
   readonly clutchCylinderLength: number;
