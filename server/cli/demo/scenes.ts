@@ -35,7 +35,7 @@ function inProgress(): Scene {
 }
 
 export const DEMO_SCENES: Readonly<Record<string, () => Scene>> = {
-  'box-beside-column.json': () => sceneOf('Box over the column, clear', zone(CLEAR), JOINTS, LASERS),
+  'box-over-column.json': () => sceneOf('Box over the column, clear', zone(CLEAR), JOINTS, LASERS),
   'first-try.json': () => sceneOf('First try, five conflicts', zone(CONFLICTS), JOINTS, LASERS),
   'under-way.json': inProgress,
 };

@@ -271,6 +271,7 @@ function engineBay(c: ZoneChoices): Component[] {
       block('port-face', 'Exhaust port face', [330, 30, 60], [-375, 365, 350]),
       block('block', 'Block', [470, 400, 210], [-345, 0, crank + 35]),
       block('left-head', 'Left head', [400, 150, 90], [-350, -225, 400], [45, 0, 0]),
+      block('left-port-face', 'Exhaust port face', [330, 95, 60], [-360, -332.5, 385]),
       block('left-cover', 'Left valve cover', [390, 110, 76], [-350, -286, 455], [45, 0, 0]),
       block('intake', 'Intake', [330, 260, 90], [-350, 0, 470]),
       drum('air-cleaner', 'Air cleaner', 320, 60, [-350, 0, 660]),
@@ -366,5 +367,6 @@ export const JOINTS: readonly PairRule[] = [
   joint('wiper', 'cowl'),
   joint('harness-clip', 'cowl'),
   joint('header-right', 'engine'),
+  joint('header-left', 'engine'),
   joint('seat', 'floor'),
 ];
