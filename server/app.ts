@@ -1,10 +1,11 @@
 // The application: routes on an Express app. It does not listen and holds nothing of its own, so tests mount it as it is.
-import express, { Router, type ErrorRequestHandler, type Express } from 'express';
+import express, { Router, type ErrorRequestHandler, type Express, type Response } from 'express';
 import { pinoHttp } from 'pino-http';
 import { accountRoutes } from './account/routes';
 import { dryFitRoutes } from './dry-fits/routes';
 import { ApiError, problemOf } from './http/api-error';
 import { numberRequests, refuseOtherSites, securityHeaders } from './http/guards';
+import { describeError, withoutSecrets } from './http/log';
 import { servePages } from './http/pages';
 import type { Services } from './http/services';
 import { meshRoutes } from './meshes/routes';
@@ -18,7 +19,9 @@ import { teamRoutes } from './teams/routes';
 /** Faults that Express and its parsers make themselves, by their type. */
 function apiErrorOf(error: unknown): ApiError | null {
   if (error instanceof ApiError) return error;
-  const { type, status } = error as { type?: string; status?: number };
+  const { type, status, cause } = error as { type?: string; status?: number; cause?: { code?: string } };
+  if (UNTEXT.has(cause?.code ?? ''))
+    return new ApiError('request/invalid', { detail: 'A text has control characters.' });
   if (type === 'entity.too.large') return new ApiError('request/too-large');
   if (type === 'entity.parse.failed') return new ApiError('request/invalid', { detail: 'The body is not JSON.' });
   if (type === 'charset.unsupported' || type === 'encoding.unsupported') return new ApiError('request/not-json');
@@ -27,12 +30,14 @@ function apiErrorOf(error: unknown): ApiError | null {
   return null;
 }
 
-/** Secrets in addresses stay out of the log. */
-const withoutSecrets = (url: string): string =>
-  url
-    .replace(/\/(s|api\/shared|invitation|api\/invitations)\/[^/?]+/g, '/$1/…')
-    .replace(/(token|callbackURL)=[^&]*/g, '$1=…')
-    .replace(/reset-password\/[^/?]+/g, 'reset-password/…');
+/** PostgreSQL's words for text that it cannot hold: a NUL, half a surrogate pair. No text of a person has them. */
+const UNTEXT = new Set(['22021', '22P05']);
+
+/** Headers of a file that was to be sent do not fit the fault that is sent instead. */
+function clearFileHeaders(res: Response): void {
+  for (const name of ['ETag', 'Content-Disposition', 'Content-Length', 'Last-Modified']) res.removeHeader(name);
+  res.setHeader('Cache-Control', 'no-store');
+}
 
 export function createApp(services: Services, options: { readonly clientFolder?: string } = {}): Express {
   const { config, log } = services;
@@ -54,6 +59,7 @@ export function createApp(services: Services, options: { readonly clientFolder?:
           url: withoutSecrets(req.url),
         }),
         res: (res: { statusCode: number }) => ({ status: res.statusCode }),
+        err: describeError,
       },
     }),
   );
@@ -68,7 +74,11 @@ export function createApp(services: Services, options: { readonly clientFolder?:
   app.use('/api/auth', services.auth.router);
 
   const api = Router();
-  api.use(express.json({ limit: '12mb', strict: true }));
+  api.use((_req, res, next) => {
+    // answers belong to one person and to one moment
+    res.setHeader('Cache-Control', 'private, no-cache');
+    next();
+  });
   for (const routes of [
     accountRoutes,
     teamRoutes,
@@ -86,13 +96,17 @@ export function createApp(services: Services, options: { readonly clientFolder?:
   });
   app.use('/api', api);
   if (options.clientFolder !== undefined) {
-    servePages(app, options.clientFolder, (token) => shareTags(services, token));
+    servePages(app, options.clientFolder, (token, req) => shareTags(services, token, req.ip ?? ''));
   }
+  app.use(() => {
+    throw new ApiError('thing/missing');
+  });
 
   const onError: ErrorRequestHandler = (error: unknown, req, res, next) => {
     if (res.headersSent) return next(error);
     const known = apiErrorOf(error);
     if (known === null) log.error({ err: error, req: { id: req.id } }, 'a request failed');
+    clearFileHeaders(res);
     const problem = problemOf(known ?? new ApiError('server/failed'), req.id as string);
     res.status(problem.status).type('application/problem+json').send(JSON.stringify(problem));
   };

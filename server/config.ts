@@ -1,4 +1,5 @@
 // Every setting, with its default. An invalid one stops the start with its name.
+import { isIP } from 'node:net';
 import path from 'node:path';
 import { z } from 'zod';
 
@@ -11,22 +12,48 @@ const list = z.string().transform((s) =>
     .filter((x) => x !== ''),
 );
 
+/** Words that Express knows for networks. */
+const NETWORKS = ['loopback', 'linklocal', 'uniquelocal'];
+
+function isNetwork(text: string): boolean {
+  if (NETWORKS.includes(text)) return true;
+  const [address = '', bits, ...rest] = text.split('/');
+  const version = isIP(address);
+  if (version === 0 || rest.length > 0) return false;
+  return bits === undefined || (/^\d{1,3}$/.test(bits) && Number(bits) <= (version === 4 ? 32 : 128));
+}
+
+/** Scheme, host and port, nothing behind. */
+const isOrigin = (text: string): boolean =>
+  URL.canParse(text) && /^https?:$/.test(new URL(text).protocol) && new URL(text).origin === text.replace(/\/$/, '');
+
+const address =
+  (schemes: RegExp) =>
+  (text: string): boolean =>
+    schemes.test(text) && URL.canParse(text);
+
 const settings = z.object({
   GAPWRIGHT_MODE: z.enum(['local', 'production']).default('local'),
   PORT: z.coerce.number().int().min(1).max(65535).default(4180),
   HOST: z.string().min(1).default('127.0.0.1'),
   /** The address people use; links in mails and share links are built from it. */
-  BASE_URL: z.url({ protocol: /^https?$/ }).optional(),
+  BASE_URL: z.string().refine(isOrigin, 'must be like https://gapwright.example, without a path').optional(),
   /** Further origins that may call the API with cookies, comma-separated. */
-  GAPWRIGHT_ORIGINS: list.default([]),
-  DATABASE_URL: z.string().regex(/^postgres(ql)?:\/\//, 'must begin with postgres://'),
+  GAPWRIGHT_ORIGINS: list
+    .default([])
+    .refine((all) => all.every(isOrigin), 'must be origins like https://shop.example, comma-separated')
+    .transform((all) => all.map((origin) => origin.replace(/\/$/, ''))),
+  DATABASE_URL: z.string().refine(address(/^postgres(ql)?:\/\//), 'must be an address that begins with postgres://'),
   DATABASE_POOL: z.coerce.number().int().min(2).max(200).default(12),
   /** Signs cookies and tokens; 32 characters or more, at random. */
   GAPWRIGHT_SECRET: z.string().min(32, 'must have at least 32 characters').default(DEFAULT_SECRET),
   /** Folder for meshes and pictures with local storage, and for uploads on their way. */
   GAPWRIGHT_FILES: z.string().min(1).default('.local/files'),
   GAPWRIGHT_STORAGE: z.enum(['local', 's3']).default('local'),
-  S3_ENDPOINT: z.url().optional(),
+  S3_ENDPOINT: z
+    .string()
+    .refine(address(/^https?:\/\//), 'must be an address that begins with https://')
+    .optional(),
   S3_REGION: z.string().default('us-east-1'),
   S3_BUCKET: z.string().optional(),
   S3_ACCESS_KEY: z.string().optional(),
@@ -34,11 +61,14 @@ const settings = z.object({
   GAPWRIGHT_MAIL: z.enum(['shelf', 'smtp']).default('shelf'),
   SMTP_URL: z
     .string()
-    .regex(/^smtps?:\/\//, 'must begin with smtp:// or smtps://')
+    .refine(address(/^smtps?:\/\//), 'must be an address that begins with smtp:// or smtps://')
     .optional(),
-  MAIL_FROM: z.string().default('Gapwright <noreply@gapwright.example>'),
+  MAIL_FROM: z
+    .string()
+    .regex(/^[^@\r\n]+@[^@\r\n]+$/, 'must be a mail address, or a name with one in <>')
+    .default('Gapwright <noreply@gapwright.example>'),
   /** Addresses or networks of the reverse proxies in front, comma-separated (`loopback` for one on this machine). */
-  TRUST_PROXY: list.default([]),
+  TRUST_PROXY: list.default([]).refine((all) => all.every(isNetwork), 'must be addresses or networks, comma-separated'),
   LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'silent']).default('info'),
   MAX_MESH_BYTES: z.coerce
     .number()

@@ -4,19 +4,32 @@ import { existsSync } from 'node:fs';
 import type { Server } from 'node:http';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
-import { pino } from 'pino';
+import { inArray } from 'drizzle-orm';
 import { createApp } from './app';
 import { createAuth } from './auth/auth';
 import { ConfigFault, readConfig } from './config';
 import { DEMO_PASSWORD, DEMO_PEOPLE } from './db/demo-people';
-import { openDatabase } from './db/client';
-import { runDryFitJob } from './dry-fits/run';
+import { openDatabase, tables, type Database } from './db/client';
+import { endForsakenDryFits, runDryFitJob } from './dry-fits/run';
 import { createLimits } from './http/limits';
+import { createLog } from './http/log';
 import { jobs, startJobs } from './jobs/jobs';
 import { sweep } from './jobs/sweep';
 import { createMailer } from './mail/mailer';
 import { sweepIncoming } from './http/upload';
 import { createFileStore } from './storage/file-store';
+
+/** Their password stands in the source: a database that was a demo's cannot go into production. */
+async function refuseDemoAccounts(db: Database): Promise<void> {
+  const demo = inArray(
+    tables.user.email,
+    DEMO_PEOPLE.map((p) => p.email),
+  );
+  if ((await db.$count(tables.user, demo)) === 0) return;
+  throw new ConfigFault(
+    'The setting DATABASE_URL names a database with the demo accounts, whose password everybody knows. Give production a database of its own.',
+  );
+}
 
 /** Requests that are under way get this long. */
 const DRAIN_MS = 3000;
@@ -38,17 +51,18 @@ function close(server: Server): Promise<void> {
 
 async function main(): Promise<void> {
   const config = readConfig(process.env);
-  const log = pino({ level: config.logLevel });
+  const log = createLog(config.logLevel);
   const database = openDatabase(config.databaseUrl, config.databasePool, (error) =>
     log.error({ err: error }, 'database'),
   );
   const { db, pool } = database;
+  if (config.mode === 'production') await refuseDemoAccounts(db);
   const mailer = createMailer(config, db, (error) => log.error({ err: error }, 'a mail was not sent'));
   const limits = createLimits(pool);
   const store = await createFileStore(config);
   await sweepIncoming(config.files);
   let isReady = true;
-  const auth = createAuth(db, config, mailer, limits);
+  const auth = createAuth(db, config, mailer, limits, { log, strict: true });
   const clientFolder = path.resolve(path.dirname(fileURLToPath(import.meta.url)), '../client');
   const app = createApp(
     { config, db, auth, mailer, store, jobs, limits, log, ready: () => isReady },
@@ -62,6 +76,7 @@ async function main(): Promise<void> {
           pool,
           log,
           concurrency: config.dryFitWorkers,
+          onFreed: () => endForsakenDryFits(db),
           handlers: {
             'dry-fit': (payload, signal) => runDryFitJob({ db, store, log }, payload.dryFitId, signal),
             sweep: () => sweep(db, store),

@@ -4,6 +4,8 @@ import { betterAuth } from 'better-auth';
 import { drizzleAdapter } from 'better-auth/adapters/drizzle';
 import { fromNodeHeaders, toNodeHandler } from 'better-auth/node';
 import express, { Router, type NextFunction, type Request, type Response } from 'express';
+import type { Logger } from 'pino';
+import { nameField } from '#shared/api';
 import type { Config } from '../config';
 import { tables, type Database } from '../db/client';
 import { ApiError } from '../http/api-error';
@@ -53,7 +55,8 @@ function isOpen(path: string): boolean {
   );
 }
 
-function createLibrary(db: Database, config: Config, mailer: Mailer, strict: boolean) {
+function createLibrary(db: Database, config: Config, mailer: Mailer, options: AuthOptions) {
+  const { strict, log } = options;
   const later = (send: Promise<void>): Promise<void> => {
     // the answer must not tell by its time whether the address is known
     send.catch(() => undefined);
@@ -67,7 +70,8 @@ function createLibrary(db: Database, config: Config, mailer: Mailer, strict: boo
     trustedOrigins: [config.baseUrl, ...config.origins],
     database: drizzleAdapter(db, { provider: 'pg', schema: tables, transaction: true }),
     telemetry: { enabled: false },
-    logger: { level: 'error' },
+    // its words only: what it hands along may hold addresses and tokens
+    logger: { level: 'error', log: (level, message) => log.warn({ level, message }, 'accounts') },
     emailAndPassword: {
       enabled: true,
       requireEmailVerification: true,
@@ -117,15 +121,14 @@ function createLibrary(db: Database, config: Config, mailer: Mailer, strict: boo
 
 const DISPLAYS = ['mm', 'in', 'in-decimal'] as const;
 
-/** `strict: false` is for tests that sign in many people from one address. */
-export function createAuth(
-  db: Database,
-  config: Config,
-  mailer: Mailer,
-  limits: Limits,
-  options: { readonly strict: boolean } = { strict: true },
-): Auth {
-  const library = createLibrary(db, config, mailer, options.strict);
+interface AuthOptions {
+  readonly log: Logger;
+  /** False for tests that sign in many people from one address. */
+  readonly strict: boolean;
+}
+
+export function createAuth(db: Database, config: Config, mailer: Mailer, limits: Limits, options: AuthOptions): Auth {
+  const library = createLibrary(db, config, mailer, options);
   const handler = toNodeHandler(library);
   const router = Router();
   router.use((req: Request, _res: Response, next: NextFunction) => {
@@ -136,6 +139,7 @@ export function createAuth(
   });
   router.use(express.json({ limit: '32kb' }));
   router.use((req: Request, _res: Response, next: NextFunction) => {
+    assertName(req);
     limitAccount(req, limits).then(() => next(), next);
   });
   router.use((req: Request, res: Response, next: NextFunction) => {
@@ -162,6 +166,19 @@ export function createAuth(
     },
     hashPassword: async (password) => (await library.$context).password.hash(password),
   };
+}
+
+/** The library takes a name of any kind; everywhere else a name is a line of at most 120 characters. */
+function assertName(req: Request): void {
+  if (req.path !== '/sign-up/email') return;
+  const body = req.body as { name?: unknown } | undefined;
+  const name = nameField.safeParse(body?.name);
+  if (!name.success) {
+    throw new ApiError('request/invalid', {
+      faults: name.error.issues.map((i) => ({ path: 'name', reason: i.message })),
+    });
+  }
+  req.body = { ...body, name: name.data };
 }
 
 /** Guesses at one account from many addresses, and mails to one address, are limited by the account. */

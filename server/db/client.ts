@@ -23,7 +23,13 @@ export interface DatabaseHandle {
 }
 
 export function openDatabase(url: string, connections: number, onError: (error: Error) => void): DatabaseHandle {
-  const pool = new Pool({ connectionString: url, max: connections, application_name: 'gapwright' });
+  const pool = new Pool({
+    connectionString: url,
+    max: connections,
+    application_name: 'gapwright',
+    // a request that gets no connection fails instead of hanging
+    connectionTimeoutMillis: 15_000,
+  });
   // a connection that dies while idle must not end the process
   pool.on('error', onError);
   return { pool, db: drizzle(pool, { schema: tables }), close: () => pool.end() };

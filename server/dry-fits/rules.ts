@@ -122,7 +122,7 @@ export async function findPicture(db: Queryable, id: string): Promise<typeof pic
 /** A revision with its document, the report that counts, and its pictures. */
 export async function findRevision(db: Queryable, id: string) {
   const [row] = await db
-    .select({ revision, project, sceneName: scene.name, madeBy: user.name })
+    .select({ revision, project, sceneName: scene.name, sceneDeletedAt: scene.deletedAt, madeBy: user.name })
     .from(revision)
     .innerJoin(scene, eq(scene.id, revision.sceneId))
     .innerJoin(project, eq(project.id, scene.projectId))

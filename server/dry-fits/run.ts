@@ -1,5 +1,5 @@
 // The job behind "Run dry fit". It may be started over at any point: it only ever moves its row from running to an end.
-import { and, eq, inArray } from 'drizzle-orm';
+import { and, eq, inArray, sql } from 'drizzle-orm';
 import type { Logger } from 'pino';
 import { tables, type Database } from '../db/client';
 import { runThread } from '../jobs/thread';
@@ -42,6 +42,19 @@ async function end(db: Database, id: string, fields: Partial<typeof dryFit.$infe
     .update(dryFit)
     .set({ ...fields, endedAt: new Date() })
     .where(and(eq(dryFit.id, id), eq(dryFit.state, 'running')));
+}
+
+/**
+ * Ends the dry fits that no server will take up any more: their job is gone, or was begun as often as it may and brought the
+ * server down each time. Otherwise one of them would stand there as running for ever.
+ */
+export async function endForsakenDryFits(db: Database): Promise<void> {
+  await db.execute(sql`
+    update dry_fit set state = 'failed', ended_at = now(),
+      problem = 'The dry fit was begun several times and came to no end. If it does so again, tell whoever runs the server.'
+    where state in ('queued', 'running') and not exists (
+      select from graphile_worker.jobs j
+      where j.key = 'dry-fit-' || dry_fit.id and (j.attempts < j.max_attempts or j.locked_at is not null))`);
 }
 
 /** Carries out one dry fit. Throws only if the server stops in the middle; then the queue gives it out again. */
@@ -91,7 +104,14 @@ export async function runDryFitJob(parts: Parts, id: string, signal: AbortSignal
     }
   } catch (error) {
     clearInterval(beat);
-    if (signal.aborted) throw error;
+    if (signal.aborted) {
+      // it waits again until a server takes it up
+      await db
+        .update(dryFit)
+        .set({ state: 'queued', done: 0, total: 0 })
+        .where(and(eq(dryFit.id, id), eq(dryFit.state, 'running')));
+      throw error;
+    }
     if (cancelled.signal.aborted) return;
     log.error({ err: error, dryFit: id }, 'a dry fit failed');
     const problem = /memory/i.test(String(error))

@@ -9,6 +9,8 @@ const KINDS = {
   signIn: { points: 20, seconds: 15 * 60 },
   /** Mails to one address: resets, verifications, invitations. */
   mailTo: { points: 10, seconds: 60 * 60 },
+  /** Invitations that one person sends. */
+  invite: { points: 60, seconds: 60 * 60 },
   /** Uploads by one person. */
   upload: { points: 120, seconds: 60 * 60 },
   /** Pictures by one person: a dry fit brings up to two dozen at once. */

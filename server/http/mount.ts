@@ -1,11 +1,12 @@
 // Puts an endpoint on a router. Everything that must happen before a handler happens here, in one order, for all: session,
 // parameters, right, body. A handler gets parsed input and says what the answer is.
-import type { Request, RequestHandler, Response, Router } from 'express';
+import express, { type Request, type RequestHandler, type Response, type Router } from 'express';
 import type { z } from 'zod';
 import { can, type Role, type Standing } from '#shared/access';
 import type { Endpoint } from '#shared/api';
 import type { Person } from '../auth/auth';
 import { ApiError } from './api-error';
+import type { LimitKind } from './limits';
 import type { Services } from './services';
 import { findStanding } from './standing';
 
@@ -65,20 +66,42 @@ async function authorise(
 
 const NOBODY: Person = { id: '', name: '', email: '', emailVerified: false, display: null, words: 'us' };
 
-/** `before` runs between the right and the handler: the reading of a multipart body. */
+/** A scene of 4 MB and its difference fit; so do the longest notes. */
+const MOST_JSON = { document: '12mb', other: '256kb' } as const;
+const jsonReaders = {
+  document: express.json({ limit: MOST_JSON.document, strict: true }),
+  other: express.json({ limit: MOST_JSON.other, strict: true }),
+};
+
+/** Reads the body only now, when the caller has the right: others cannot make the server parse megabytes. */
+async function readJson(endpoint: Endpoint, req: Request, res: Response): Promise<void> {
+  if (endpoint.method === 'GET') return;
+  if (req.is('application/json') === false) throw new ApiError('request/not-json');
+  await runBefore(endpoint.takesDocument ? jsonReaders.document : jsonReaders.other, req, res);
+}
+
+export interface MountOptions {
+  /** Reads the body of a form. */
+  readonly reader?: RequestHandler;
+  /** Counted by person before the body is read. */
+  readonly limit?: LimitKind;
+}
+
 export function mount<P extends z.ZodType, Q extends z.ZodType, B extends z.ZodType, R extends z.ZodType>(
   router: Router,
   services: Services,
   endpoint: Endpoint<P, Q, B, R>,
   handler: Handler<P, Q, B, R>,
-  before?: RequestHandler,
+  options: MountOptions = {},
 ): void {
   const run = async (req: Request, res: Response): Promise<void> => {
     const { person, standing } = await authorise(services, endpoint, req);
     const params = endpoint.params.safeParse(req.params);
     if (!params.success) throw new ApiError('thing/missing');
     const query = parse(endpoint.query, req.query);
-    if (before !== undefined) await runBefore(before, req, res);
+    if (options.limit !== undefined) await services.limits.use(options.limit, (person ?? NOBODY).id);
+    if (options.reader !== undefined) await runBefore(options.reader, req, res);
+    if (endpoint.takes === 'json') await readJson(endpoint, req, res);
     const body = endpoint.takes === 'json' ? parse(endpoint.body, req.body) : ({} as z.output<B>);
     const answer = await handler({
       services,

@@ -6,7 +6,11 @@ import express, { type Express, type Request, type Response } from 'express';
 const MARK = '<!--share-tags-->';
 
 /** `tagsOf` gives the tags that a share link's preview is made of. */
-export function servePages(app: Express, clientFolder: string, tagsOf: (token: string) => Promise<string>): void {
+export function servePages(
+  app: Express,
+  clientFolder: string,
+  tagsOf: (token: string, req: Request) => Promise<string>,
+): void {
   const indexFile = path.join(clientFolder, 'index.html');
   if (!existsSync(indexFile)) return;
   const page = readFileSync(indexFile, 'utf8');
@@ -22,7 +26,7 @@ export function servePages(app: Express, clientFolder: string, tagsOf: (token: s
     res.send(page.replace(MARK, () => tags));
   };
   app.get('/s/:token', (req: Request<{ token: string }>, res, next) => {
-    tagsOf(req.params.token).then((tags) => send(res, tags), next);
+    tagsOf(req.params.token, req as Request).then((tags) => send(res, tags), next);
   });
   app.get('/{*rest}', (_req, res) => send(res, ''));
 }

@@ -42,9 +42,12 @@ export async function sendFile(
   key: string,
   options: SendOptions,
 ): Promise<void> {
-  if (head(req, res, options)) return;
   const file = await store.open(key);
   if (file === null) throw new ApiError('thing/missing');
+  if (head(req, res, options)) {
+    file.stream.destroy();
+    return;
+  }
   res.setHeader('Content-Length', String(file.bytes));
   try {
     await pipeline(file.stream, res);

@@ -1,5 +1,5 @@
 // What a person is to a thing: found with one query, from the thing up to its team.
-import { and, arrayContains, eq, sql } from 'drizzle-orm';
+import { and, arrayContains, eq, isNotNull, or, sql } from 'drizzle-orm';
 import type { Standing } from '#shared/access';
 import type { ThingKind } from '#shared/api';
 import { tables, type Queryable } from '../db/client';
@@ -73,7 +73,7 @@ async function homeOf(db: Queryable, kind: ThingKind, id: string, params: Params
   }
 }
 
-/** Whether a guest was added to the project, or, for a mesh, to a project whose scenes use it. */
+/** Whether a guest was added to the project, or, for a mesh, to a project whose scenes or revisions use it. */
 async function isAdded(db: Queryable, personId: string, kind: ThingKind, home: Home, id: string): Promise<boolean> {
   if (kind === 'mesh') {
     const rows = await db
@@ -81,7 +81,8 @@ async function isAdded(db: Queryable, personId: string, kind: ThingKind, home: H
       .from(projectGuest)
       .innerJoin(project, and(eq(project.id, projectGuest.projectId), eq(project.teamId, home.teamId)))
       .innerJoin(scene, eq(scene.projectId, project.id))
-      .where(and(eq(projectGuest.personId, personId), arrayContains(scene.meshes, [id])))
+      .leftJoin(revision, and(eq(revision.sceneId, scene.id), arrayContains(revision.meshes, [id])))
+      .where(and(eq(projectGuest.personId, personId), or(arrayContains(scene.meshes, [id]), isNotNull(revision.id))))
       .limit(1);
     return rows.length > 0;
   }

@@ -6,6 +6,7 @@ import { makeWorkerUtils, run, type Runner, type TaskList, type WorkerEvents } f
 import type { Pool } from 'pg';
 import type { Logger } from 'pino';
 import { tables, type Database, type Queryable } from '../db/client';
+import { isAlive } from './processes';
 
 const { workerSeen } = tables;
 
@@ -49,23 +50,19 @@ interface RunnerOptions {
   readonly pool: Pool;
   readonly concurrency: number;
   readonly handlers: JobHandlers;
+  /** Called after the jobs of dead workers were given back: for what no job will end any more. */
+  readonly onFreed?: () => Promise<void>;
   readonly log: Logger;
-}
-
-function isAlive(pid: number): boolean {
-  try {
-    process.kill(pid, 0);
-    return true;
-  } catch (error) {
-    return (error as NodeJS.ErrnoException).code === 'EPERM';
-  }
 }
 
 /** Gives the jobs of dead workers back: at once for those of this machine whose process is gone, else after a minute. */
 async function freeDeadWorkers(options: RunnerOptions, unlock: (ids: string[]) => Promise<void>): Promise<void> {
   const { db } = options;
   const here = await db.select().from(workerSeen).where(eq(workerSeen.host, hostname()));
-  const gone = here.filter((w) => w.pid !== process.pid && !isAlive(w.pid)).map((w) => w.workerId);
+  // a container that starts again has its old name and number: what was seen before this process began is not its own
+  const began = new Date(Date.now() - process.uptime() * 1000);
+  const isGone = (w: (typeof here)[number]): boolean => (w.pid === process.pid ? w.seenAt < began : !isAlive(w.pid));
+  const gone = here.filter(isGone).map((w) => w.workerId);
   const dead = await db
     .select({ id: workerSeen.workerId })
     .from(workerSeen)
@@ -86,7 +83,10 @@ async function freeDeadWorkers(options: RunnerOptions, unlock: (ids: string[]) =
 export async function startJobs(options: RunnerOptions): Promise<JobRunner> {
   const { db, pool, handlers, log } = options;
   const utils = await makeWorkerUtils({ pgPool: pool });
-  const free = (): Promise<void> => freeDeadWorkers(options, (ids) => utils.forceUnlockWorkers(ids));
+  const free = async (): Promise<void> => {
+    await freeDeadWorkers(options, (ids) => utils.forceUnlockWorkers(ids));
+    await options.onFreed?.();
+  };
   await free();
   const stopping = new AbortController();
   const taskList: TaskList = Object.fromEntries(
@@ -101,7 +101,7 @@ export async function startJobs(options: RunnerOptions): Promise<JobRunner> {
     for (const workerId of workers) {
       await db
         .insert(workerSeen)
-        .values({ workerId, host: hostname(), pid: process.pid })
+        .values({ workerId, host: hostname(), pid: process.pid, seenAt: new Date() })
         .onConflictDoUpdate({ target: workerSeen.workerId, set: { seenAt: new Date() } });
     }
   };

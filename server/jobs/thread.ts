@@ -28,6 +28,7 @@ export interface ThreadOptions {
 /** Runs a thread to its answer. Rejects if it fails, runs out of memory or is aborted. */
 export function runThread(name: string, options: ThreadOptions): Promise<unknown> {
   return new Promise((resolve, reject) => {
+    if (options.signal?.aborted === true) return reject(new Error('aborted'));
     const worker = new Worker(threadFile(name), {
       workerData: options.data,
       resourceLimits: { maxOldGenerationSizeMb: options.memory },
@@ -36,7 +37,6 @@ export function runThread(name: string, options: ThreadOptions): Promise<unknown
       void worker.terminate();
       reject(new Error('aborted'));
     };
-    if (options.signal?.aborted === true) return abort();
     options.signal?.addEventListener('abort', abort, { once: true });
     worker.on('message', (message: unknown) => {
       if (options.isAnswer === undefined || options.isAnswer(message)) {

@@ -28,7 +28,13 @@ const oneLine = (text: string): string =>
 
 function createTransport(config: Config, db: Database): Transporter {
   if (config.mail.kind === 'shelf') return nodemailer.createTransport(shelfTransport(db));
-  return nodemailer.createTransport(config.mail.url, {});
+  return nodemailer.createTransport({
+    url: config.mail.url,
+    // an invitation waits for its mail; a silent mail server must not keep it for minutes
+    connectionTimeout: 10_000,
+    greetingTimeout: 10_000,
+    socketTimeout: 20_000,
+  });
 }
 
 export function createMailer(config: Config, db: Database, onError: (error: unknown) => void): Mailer {

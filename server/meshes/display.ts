@@ -5,19 +5,21 @@ import type { Mesh } from '#shared/geometry';
 
 /** Triangles of a display mesh, about. */
 const TARGET = 20_000;
-/** How far the surface may move, as a share of the mesh's extent. */
-const ERROR = 0.01;
+/** How far the surface may move, as a share of the mesh's extent: of a small mesh hardly, of a large one a little. */
+const ERROR = { small: 0.002, large: 0.01 } as const;
 
 export async function displayMeshOf(mesh: Mesh): Promise<DisplayMesh> {
   await MeshoptSimplifier.ready;
   const positions = Float32Array.from(mesh.corners);
-  const target = Math.min(mesh.triangles.length, TARGET * 3);
-  // even a small mesh is simplified a little, so that what goes out is never the file itself
-  const [simplified] = MeshoptSimplifier.simplify(mesh.triangles, positions, 3, target, ERROR, ['LockBorder']);
+  const isSmall = mesh.triangles.length <= TARGET * 3;
+  // a small mesh is thinned out too, as far as it hardly shows, so that what goes out is never the file itself
+  const target = isSmall ? 3 * Math.ceil(mesh.triangles.length / 6) : TARGET * 3;
+  const error = isSmall ? ERROR.small : ERROR.large;
+  const [simplified] = MeshoptSimplifier.simplify(mesh.triangles, positions, 3, target, error, ['LockBorder']);
   let index = simplified;
-  if (index.length > target * 2) {
+  if (!isSmall && index.length > target * 2) {
     // a surface full of borders and folds resists; for looking at, a rougher method will do
-    [index] = MeshoptSimplifier.simplifySloppy(mesh.triangles, positions, 3, null, target, ERROR);
+    [index] = MeshoptSimplifier.simplifySloppy(mesh.triangles, positions, 3, null, target, error);
   }
   return compact(positions, index.length >= 3 ? index : mesh.triangles);
 }

@@ -12,7 +12,7 @@ import {
   uploadMesh,
   type MeshLine,
 } from '#shared/api';
-import { tables } from '../db/client';
+import { tables, type Transaction } from '../db/client';
 import { ApiError } from '../http/api-error';
 import { mount, SENT } from '../http/mount';
 import { sendBytes, sendFile } from '../http/send-file';
@@ -32,7 +32,7 @@ function goneSignal(res: Response): AbortSignal {
 }
 
 export function meshRoutes(router: Router, services: Services): void {
-  const { db, store, config, limits } = services;
+  const { db, store, config } = services;
   const find = async (teamId: string, sha256: string): Promise<MeshLine> => {
     const [found] = await listMeshLines(db, teamId, { sort: 'name', sha256 });
     if (found === undefined) throw new ApiError('thing/missing');
@@ -43,27 +43,37 @@ export function meshRoutes(router: Router, services: Services): void {
 
   mount(router, services, listProjectMeshes, ({ params }) => meshesOfProject(db, params.projectId));
 
+  // the name by which an upload and a deletion of one mesh wait for one another
+  const lockMesh = (tx: Transaction, key: string) =>
+    tx.execute(sql`select pg_advisory_xact_lock(hashtextextended(${key}, 0))`);
+
   const keep = async (incoming: Incoming, teamId: string, personId: string, signal: AbortSignal) => {
     const judged = await judgeFile(incoming.file, signal);
     if (!judged.ok) throw new ApiError('mesh/refused', { detail: `${incoming.name} was not taken: ${judged.reason}.` });
     const { sha256, facts } = judged;
     const key = meshKey(teamId, sha256);
     // the file first: a row must never name a file that is not there
-    if (!(await store.has(key))) await store.takeFile(key, incoming.file);
-    const made = await db
-      .insert(mesh)
-      .values({
-        teamId,
-        sha256,
-        name: incoming.name,
-        bytes: incoming.bytes,
-        ...facts,
-        guess: guessUnit(facts),
-        uploadedBy: personId,
-      })
-      .onConflictDoNothing()
-      .returning({ sha256: mesh.sha256 });
-    return { mesh: await find(teamId, sha256), isNew: made.length > 0 };
+    const wasThere = await store.has(key);
+    if (!wasThere) await store.takeFile(key, incoming.file);
+    const row = { teamId, sha256, name: incoming.name, bytes: incoming.bytes, ...facts, guess: guessUnit(facts) };
+    try {
+      const made = await db.transaction(async (tx) => {
+        await lockMesh(tx, key);
+        const rows = await tx
+          .insert(mesh)
+          .values({ ...row, uploadedBy: personId })
+          .onConflictDoNothing()
+          .returning({ sha256: mesh.sha256 });
+        // somebody deleted the mesh since the look at the storage
+        if (wasThere && !(await store.has(key))) await store.takeFile(key, incoming.file);
+        return rows;
+      });
+      return { mesh: await find(teamId, sha256), isNew: made.length > 0 };
+    } catch (error) {
+      // the team is gone, say: a file that no row names would lie there for ever
+      if ((await listMeshLines(db, teamId, { sort: 'name', sha256 })).length === 0) await store.remove(key);
+      throw error;
+    }
   };
 
   mount(
@@ -74,27 +84,33 @@ export function meshRoutes(router: Router, services: Services): void {
       const incoming = incomingOf(req);
       if (incoming === null) throw new ApiError('mesh/no-file');
       try {
-        await limits.use('upload', person.id);
         return await keep(incoming, params.teamId, person.id, goneSignal(res));
       } finally {
         await rm(incoming.file, { force: true });
       }
     },
-    readUpload(config.files, config.maxMeshBytes, 'mesh/too-large'),
+    {
+      limit: 'upload',
+      reader: readUpload(config.files, config.maxMeshBytes, { noFile: 'mesh/no-file', tooLarge: 'mesh/too-large' }),
+    },
   );
 
   mount(router, services, readMesh, ({ params }) => find(params.teamId, params.sha256));
 
   mount(router, services, changeMesh, async ({ params, body }) => {
-    await db
-      .update(mesh)
-      .set(body)
-      .where(and(eq(mesh.teamId, params.teamId), eq(mesh.sha256, params.sha256)));
+    // an empty change has no columns to set
+    if (body.name !== undefined || body.unit !== undefined) {
+      await db
+        .update(mesh)
+        .set(body)
+        .where(and(eq(mesh.teamId, params.teamId), eq(mesh.sha256, params.sha256)));
+    }
     return find(params.teamId, params.sha256);
   });
 
   mount(router, services, deleteMesh, async ({ params }) => {
     await db.transaction(async (tx) => {
+      await lockMesh(tx, meshKey(params.teamId, params.sha256));
       // a scene that is just being saved with this mesh must wait, or be seen
       await tx.execute(
         sql`select 1 from mesh where team_id = ${params.teamId} and sha256 = ${params.sha256} for update`,
@@ -119,9 +135,9 @@ export function meshRoutes(router: Router, services: Services): void {
         });
       }
       await tx.delete(mesh).where(and(eq(mesh.teamId, params.teamId), eq(mesh.sha256, params.sha256)));
+      await store.remove(meshKey(params.teamId, params.sha256));
+      await store.remove(displayKey(params.teamId, params.sha256));
     });
-    await store.remove(meshKey(params.teamId, params.sha256));
-    await store.remove(displayKey(params.teamId, params.sha256));
     return null;
   });
 

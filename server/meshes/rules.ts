@@ -2,6 +2,7 @@
 import { and, asc, eq, isNull, sql } from 'drizzle-orm';
 import { MESH_UNITS, type MeshLine, type MeshUnit } from '#shared/api';
 import { tables, type Queryable } from '../db/client';
+import { createQueue } from '../jobs/queue';
 import { runThread } from '../jobs/thread';
 import type { FileStore } from '../storage/file-store';
 import type { MeshAnswer, MeshFacts } from './worker';
@@ -29,13 +30,15 @@ export type Judged =
   | { readonly ok: true; readonly facts: MeshFacts; readonly sha256: string }
   | { readonly ok: false; readonly reason: string };
 
+/** A mesh on the bench takes hundreds of megabytes: more than this many at a time wait for one another. */
+const oneOfFew = createQueue(2);
+
 /** Reads and judges a file in a thread. */
 export async function judgeFile(file: string, signal?: AbortSignal): Promise<Judged> {
-  const answer = (await runThread('mesh-worker', {
-    data: { kind: 'judge', file },
-    memory: 2048,
+  const answer = (await oneOfFew(
+    () => runThread('mesh-worker', { data: { kind: 'judge', file }, memory: 2048, signal }),
     signal,
-  })) as MeshAnswer;
+  )) as MeshAnswer;
   if (answer.kind === 'judged') return { ok: true, facts: answer.facts, sha256: answer.sha256 };
   return { ok: false, reason: answer.kind === 'refused' ? answer.reason : 'the file could not be read' };
 }
@@ -45,10 +48,12 @@ export async function displayMesh(store: FileStore, teamId: string, sha256: stri
   const key = displayKey(teamId, sha256);
   const kept = await store.readBytes(key);
   if (kept !== null) return kept;
-  const bytes = await store.readBytes(meshKey(teamId, sha256));
-  if (bytes === null) return null;
-  const answer = (await runThread('mesh-worker', { data: { kind: 'display', bytes }, memory: 2048 })) as MeshAnswer;
-  if (answer.kind !== 'display') return null;
+  const answer = await oneOfFew(async () => {
+    const bytes = await store.readBytes(meshKey(teamId, sha256));
+    if (bytes === null) return null;
+    return (await runThread('mesh-worker', { data: { kind: 'display', bytes }, memory: 2048 })) as MeshAnswer;
+  });
+  if (answer?.kind !== 'display') return null;
   await store.putBytes(key, answer.bytes);
   return answer.bytes;
 }

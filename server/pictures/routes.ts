@@ -1,9 +1,9 @@
 import { randomUUID } from 'node:crypto';
 import { readFile, rm } from 'node:fs/promises';
-import { and, eq } from 'drizzle-orm';
+import { and, eq, sql } from 'drizzle-orm';
 import type { Router } from 'express';
 import { deletePicture, readPicture, storePicture } from '#shared/api';
-import { tables } from '../db/client';
+import { tables, type Transaction } from '../db/client';
 import { describePicture, findPicture } from '../dry-fits/rules';
 import { ApiError } from '../http/api-error';
 import { mount, SENT } from '../http/mount';
@@ -17,7 +17,7 @@ const { picture } = tables;
 const MAX_BYTES = 16 * 1024 * 1024;
 
 export function pictureRoutes(router: Router, services: Services): void {
-  const { db, store, config, limits } = services;
+  const { db, store, config } = services;
 
   mount(
     router,
@@ -25,9 +25,8 @@ export function pictureRoutes(router: Router, services: Services): void {
     storePicture,
     async ({ params, query, person, req }) => {
       const incoming = incomingOf(req);
-      if (incoming === null) throw new ApiError('mesh/no-file');
+      if (incoming === null) throw new ApiError('picture/refused');
       try {
-        await limits.use('picture', person.id);
         const bytes = await readFile(incoming.file);
         const size = pngSize(bytes);
         if (size === null) throw new ApiError('picture/refused');
@@ -39,7 +38,9 @@ export function pictureRoutes(router: Router, services: Services): void {
         }
         const storageKey = `pictures/${params.revisionId}/${randomUUID()}.png`;
         await store.putBytes(storageKey, bytes);
-        const row = await db.transaction(async (tx) => {
+        const insertRow = async (tx: Transaction) => {
+          // two pictures of one finding at once come one after the other
+          await tx.execute(sql`select 1 from revision where id = ${params.revisionId} for no key update`);
           // a finding has one picture: a newer one takes its place
           const old = isFinding
             ? await tx
@@ -60,6 +61,10 @@ export function pictureRoutes(router: Router, services: Services): void {
             })
             .returning();
           return { made: made!, old };
+        };
+        const row = await db.transaction(insertRow).catch(async (error: unknown) => {
+          await store.remove(storageKey);
+          throw error;
         });
         for (const { key } of row.old) await store.remove(key);
         return describePicture(row.made, person.name);
@@ -67,7 +72,10 @@ export function pictureRoutes(router: Router, services: Services): void {
         await rm(incoming.file, { force: true });
       }
     },
-    readUpload(config.files, MAX_BYTES, 'picture/refused'),
+    {
+      limit: 'picture',
+      reader: readUpload(config.files, MAX_BYTES, { noFile: 'picture/refused', tooLarge: 'picture/refused' }),
+    },
   );
 
   mount(router, services, readPicture, async ({ params, req, res }) => {

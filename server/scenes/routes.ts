@@ -19,7 +19,7 @@ import { mount } from '../http/mount';
 import type { Services } from '../http/services';
 import { noteActivity, noteActivityOnce, touchProject } from '../projects/rules';
 import { findSceneLine, listSceneLines } from './queries';
-import { findSave, lockScene, newerThan, readScene, sceneOf, storeSave } from './rules';
+import { assertMeshes, findSave, lockScene, newerThan, readScene, sceneOf, storeSave } from './rules';
 
 const { project, scene } = tables;
 
@@ -64,7 +64,8 @@ export function sceneRoutes(router: Router, services: Services): void {
     const id = await db.transaction(async (tx) => {
       const row = await readScene(tx, params.sceneId);
       const copy = patchHead(sceneOf(row.document), { name: body.name });
-      const made = await insert(tx, row.projectId, copy, row.meshes, person.id);
+      const meshes = await assertMeshes(tx, row.teamId, copy);
+      const made = await insert(tx, row.projectId, copy, meshes, person.id);
       await noteActivity(tx, row.projectId, person.id, `made “${body.name}” from “${row.name}”`);
       return made;
     });

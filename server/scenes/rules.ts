@@ -2,7 +2,7 @@
 import { createHash } from 'node:crypto';
 import { and, eq, inArray, max, sql } from 'drizzle-orm';
 import { meshNames } from '#shared/check';
-import { canonicalSceneText, loadScene, type Scene } from '#shared/scene';
+import { canonicalSceneText, loadScene, MAX_DOCUMENT_BYTES, type Scene } from '#shared/scene';
 import { tables, type Queryable, type Transaction } from '../db/client';
 import { ApiError } from '../http/api-error';
 
@@ -35,14 +35,25 @@ export function sceneOf(document: unknown): Scene {
   throw new ApiError('scene/refused', { faults: loaded.refusals.slice(0, 50) });
 }
 
-/** Refuses a scene that names meshes which the team does not have. */
-export async function assertMeshes(db: Queryable, teamId: string, wanted: Scene): Promise<string[]> {
+/** A document that no file could hold is not stored either. */
+function assertSize(next: Scene): void {
+  const bytes = Buffer.byteLength(canonicalSceneText(next));
+  if (bytes <= MAX_DOCUMENT_BYTES) return;
+  const reason = `the document has ${bytes} bytes, more than the ${MAX_DOCUMENT_BYTES} allowed`;
+  throw new ApiError('scene/refused', { faults: [{ path: '', reason }] });
+}
+
+/** Refuses a scene that names meshes which the team does not have; holds those it has until the transaction ends. */
+export async function assertMeshes(tx: Transaction, teamId: string, wanted: Scene): Promise<string[]> {
   const names = meshNames(wanted);
   if (names.length === 0) return [];
-  const there = await db
+  const there = await tx
     .select({ sha256: mesh.sha256 })
     .from(mesh)
-    .where(and(eq(mesh.teamId, teamId), inArray(mesh.sha256, names)));
+    .where(and(eq(mesh.teamId, teamId), inArray(mesh.sha256, names)))
+    .orderBy(mesh.sha256)
+    // whoever deletes one at the same moment waits, and then finds the scene
+    .for('share');
   const known = new Set(there.map((m) => m.sha256));
   const missing = names.filter((name) => !known.has(name));
   if (missing.length > 0) {
@@ -61,6 +72,7 @@ export async function storeSave(
   personId: string,
   saveId: string,
 ): Promise<number> {
+  assertSize(next);
   const meshes = await assertMeshes(tx, row.teamId, next);
   const saveNumber = row.saveNumber + 1;
   await tx
@@ -124,6 +136,8 @@ export async function freeze(
     .orderBy(sql`${revision.number} desc`)
     .limit(1);
   if (same !== undefined && same.notOnThisCar.join() === notOnThisCar.join()) {
+    // the scene stands again as it stood then: what was checked then is current now
+    await tx.update(revision).set({ saveNumber }).where(eq(revision.id, same.id));
     return { revisionId: same.id, number: same.number, scene: frozen, row };
   }
   const [last] = await tx

@@ -111,7 +111,11 @@ export function shareRoutes(router: Router, services: Services): void {
     const sha256 = meshes[params.index];
     const bytes = sha256 === undefined ? null : await displayMesh(store, found.project.teamId, sha256);
     if (bytes === null) throw new ApiError('thing/missing');
-    sendBytes(req, res, bytes, { type: 'application/octet-stream', tag: `s-${sha256!}`, isPublic: true });
+    sendBytes(req, res, bytes, {
+      type: 'application/octet-stream',
+      tag: `${found.revision.id}-${params.index}`,
+      isPublic: true,
+    });
     return SENT;
   });
 }

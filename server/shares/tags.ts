@@ -12,9 +12,10 @@ function tag(property: string, content: string): string {
 }
 
 /** The tags for a share's page; for a link that opens nothing, only that it must not be indexed. */
-export async function shareTags(services: Services, token: string): Promise<string> {
+export async function shareTags(services: Services, token: string, address: string): Promise<string> {
   const hidden = '<meta name="robots" content="noindex" />';
   try {
+    await services.limits.use('share', address);
     const { row, revision, scene, report } = await openShare(services.db, token);
     const { baseUrl } = services.config;
     const title = `${revision.project.name}: ${scene.name}, revision ${revision.revision.number}`;

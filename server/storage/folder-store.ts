@@ -24,7 +24,13 @@ export function createFolderStore(root: string): FileStore {
         await rename(file, part);
       } catch (error) {
         if ((error as NodeJS.ErrnoException).code !== 'EXDEV') throw error;
-        await copyFile(file, part);
+        // the folder lies on another disk
+        try {
+          await copyFile(file, part);
+        } catch (fault) {
+          await rm(part, { force: true });
+          throw fault;
+        }
         await unlink(file);
       }
       await rename(part, target);

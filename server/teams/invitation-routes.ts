@@ -66,7 +66,6 @@ export function invitationRoutes(router: Router, services: Services): void {
   const { db, mailer, limits, config } = services;
 
   const send = async (teamId: string, id: string, email: string, role: string, invitedBy: string): Promise<void> => {
-    await limits.use('mailTo', email);
     const [row] = await db.select({ name: team.name }).from(team).where(eq(team.id, teamId));
     const url = `${config.baseUrl}/invitation/${id}`;
     await mailer.sendInvitation(email, { team: row?.name ?? '', invitedBy, role, url });
@@ -77,6 +76,9 @@ export function invitationRoutes(router: Router, services: Services): void {
   mount(router, services, invite, async ({ params, body, person }) => {
     const email = body.email.toLowerCase();
     const { teamId } = params;
+    // before anything is stored: one who is told to wait has not invited anybody yet
+    await limits.use('invite', person.id);
+    await limits.use('mailTo', email);
     const [member] = await db
       .select({ id: user.id })
       .from(membership)
@@ -118,11 +120,24 @@ export function invitationRoutes(router: Router, services: Services): void {
         .returning({ id: invitation.id });
       return row!.id;
     });
-    await send(teamId, id, email, body.role, person.name);
+    try {
+      await send(teamId, id, email, body.role, person.name);
+    } catch (error) {
+      // an invitation that nobody was told of would only stand in the way of the next try
+      await db.delete(invitation).where(eq(invitation.id, id));
+      throw error;
+    }
     return (await describe(db, teamId, id))[0]!;
   });
 
   mount(router, services, resendInvitation, async ({ params, person }) => {
+    const [known] = await db
+      .select({ email: invitation.email })
+      .from(invitation)
+      .where(and(eq(invitation.teamId, params.teamId), eq(invitation.id, params.invitationId)));
+    if (known === undefined) throw new ApiError('thing/missing');
+    await limits.use('invite', person.id);
+    await limits.use('mailTo', known.email);
     const [row] = await db
       .update(invitation)
       .set({ expiresAt: lastsUntil() })

@@ -15,8 +15,9 @@ import { tables, type Queryable } from '../db/client';
 import { ApiError } from '../http/api-error';
 import { mount } from '../http/mount';
 import type { Services } from '../http/services';
+import { pictureKeysOfTeam } from '../pictures/rules';
 import { invitationRoutes } from './invitation-routes';
-import { changePeople, removeMember } from './rules';
+import { changePeople, removeGuest, removeMember } from './rules';
 
 const { membership, team, user } = tables;
 
@@ -56,6 +57,7 @@ export function teamRoutes(router: Router, services: Services): void {
   });
 
   mount(router, services, deleteTeam, async ({ params, body }) => {
+    const pictures = await pictureKeysOfTeam(db, params.teamId);
     const gone = await db
       .delete(team)
       .where(and(eq(team.id, params.teamId), eq(team.name, body.name.trim())))
@@ -65,6 +67,7 @@ export function teamRoutes(router: Router, services: Services): void {
     for (const kind of ['meshes', 'displays']) {
       for (const key of await store.keys(`${kind}/${params.teamId}`)) await store.remove(key);
     }
+    for (const key of pictures) await store.remove(key);
     return null;
   });
 
@@ -83,6 +86,8 @@ export function teamRoutes(router: Router, services: Services): void {
         .where(and(eq(membership.teamId, params.teamId), eq(membership.personId, params.personId)))
         .returning({ id: membership.personId });
       if (changed.length === 0) throw new ApiError('thing/missing');
+      // one who becomes a guest again later begins without projects
+      if (body.role !== 'guest') await removeGuest(tx, params.teamId, params.personId);
     });
     return (await listMembers(db, params.teamId, params.personId))[0]!;
   });

@@ -34,6 +34,12 @@ export async function removeMember(tx: Transaction, teamId: string, personId: st
     .delete(membership)
     .where(and(eq(membership.teamId, teamId), eq(membership.personId, personId)))
     .returning({ id: membership.personId });
+  await removeGuest(tx, teamId, personId);
+  return gone.length > 0;
+}
+
+/** Takes a person out of all projects of a team that he was added to as a guest. */
+export async function removeGuest(tx: Transaction, teamId: string, personId: string): Promise<void> {
   await tx
     .delete(projectGuest)
     .where(
@@ -42,7 +48,6 @@ export async function removeMember(tx: Transaction, teamId: string, personId: st
         sql`${projectGuest.projectId} in (select ${project.id} from ${project} where ${project.teamId} = ${teamId})`,
       ),
     );
-  return gone.length > 0;
 }
 
 /** Adds a person; one who is there already keeps his role. */

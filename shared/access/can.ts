@@ -50,24 +50,36 @@ const TABLE = {
 export type Action = keyof typeof TABLE;
 export const ACTIONS = Object.keys(TABLE) as readonly Action[];
 
-/** Actions on a project or on something in it; a guest needs to have been added to that project. */
-const IN_PROJECT: ReadonlySet<Action> = new Set<Action>(['project.read', 'scene.read', 'mesh.read', 'report.read']);
+/** Actions on the team itself. All others are on a project or on something in it, and to a guest who was not added to that
+ * project there is no such thing. */
+const ON_TEAM: ReadonlySet<Action> = new Set<Action>([
+  'team.read',
+  'team.leave',
+  'team.change',
+  'team.delete',
+  'people.read',
+  'people.change',
+  'project.list',
+  'project.create',
+  'mesh.list',
+  'mesh.upload',
+]);
 
 /**
- * Decides: `yes`; `no` for a member without the right; `stranger` for anyone outside the team, who is not told that the
- * thing exists.
+ * Decides: `yes`; `no` for a member without the right; `stranger` for anyone outside the team, and for a guest outside the
+ * projects he was added to: they are not told that the thing exists.
  */
 export function can(standing: Standing, action: Action): Verdict {
   const { role } = standing;
   if (role === null) return 'stranger';
+  if (role === 'guest' && !ON_TEAM.has(action) && !standing.addedToProject) return 'stranger';
   const roles: readonly Role[] = TABLE[action];
-  if (!roles.includes(role)) return 'no';
-  return role === 'guest' && IN_PROJECT.has(action) && !standing.addedToProject ? 'no' : 'yes';
+  return roles.includes(role) ? 'yes' : 'no';
 }
 
 /** For the client: whether to show a control at all. */
 export function mayShow(role: Role | null, action: Action): boolean {
-  return role !== null && (TABLE[action]).includes(role);
+  return role !== null && TABLE[action].includes(role);
 }
 
 /** What a role may do, in a line for the people page. */

@@ -30,6 +30,8 @@ export interface Endpoint<
   readonly response: R;
   /** How the body comes, and how the answer goes, where it is not JSON. */
   readonly takes: 'json' | 'multipart';
+  /** Whether a whole scene document may come with the request; other bodies are small. */
+  readonly takesDocument: boolean;
   readonly gives: 'json' | 'file';
   readonly status: number;
   readonly errors: readonly ErrorCode[];
@@ -47,6 +49,7 @@ type Parts<P extends z.ZodType, Q extends z.ZodType, B extends z.ZodType, R exte
   readonly body?: B;
   readonly response?: R;
   readonly takes?: 'json' | 'multipart';
+  readonly takesDocument?: boolean;
   readonly gives?: 'json' | 'file';
   readonly status?: number;
   readonly errors?: readonly ErrorCode[];
@@ -64,6 +67,7 @@ export function defineEndpoint<
     body: nothing as unknown as B,
     response: none as unknown as R,
     takes: 'json',
+    takesDocument: false,
     gives: 'json',
     status: 200,
     errors: [],
@@ -82,10 +86,21 @@ export const personId = z.string().min(1).max(64);
 export const sha256 = z.string().regex(/^[0-9a-f]{64}$/);
 export const when = z.iso.datetime();
 
-const trimmed = (most: number) =>
-  z.string().trim().min(1, 'must not be empty').max(most, `must have at most ${most} characters`);
-export const nameField = trimmed(120);
-export const textField = (most: number) => z.string().trim().max(most, `must have at most ${most} characters`);
+const UNPRINTABLE = 'must not have control characters';
+
+export const nameField = z
+  .string()
+  .trim()
+  .min(1, 'must not be empty')
+  .max(120, 'must have at most 120 characters')
+  .refine((text) => !/\p{Cc}|\p{Surrogate}/u.test(text), UNPRINTABLE);
+export const textField = (most: number) =>
+  z
+    .string()
+    .trim()
+    .max(most, `must have at most ${most} characters`)
+    // tabs and line ends are text
+    .refine((text) => !/[^\P{Cc}\t\r\n]|\p{Surrogate}/u.test(text), UNPRINTABLE);
 export const displayField = z.enum(['mm', 'in', 'in-decimal']);
 
 /** A page of a list: `after` is the cursor that the page before gave. */

@@ -11,6 +11,7 @@ import * as teams from './teams';
 export * from './account';
 export * from './display-mesh';
 export * from './dry-fits';
+export { nameField } from './endpoint';
 export type { Endpoint, Method, ThingKind, Who } from './endpoint';
 export * from './errors';
 export * from './meshes';

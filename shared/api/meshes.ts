@@ -54,7 +54,7 @@ export const listProjectMeshes = defineEndpoint({
     mesh.pick({ sha256: true, name: true, unit: true, kind: true }).extend({ scenes: z.array(z.string()) }),
   ),
 });
-/** One file in the field `file`. Answers 200 with what is there if the team has the file already. */
+/** One file in the field `file`. If the team has the file already, the answer is what is there, and `isNew` is false. */
 export const uploadMesh = defineEndpoint({
   method: 'POST',
   path: '/teams/:teamId/meshes',

@@ -128,6 +128,7 @@ export const saveDocument = defineEndpoint({
       document: z.unknown().optional(),
     })
     .refine((b) => (b.difference === undefined) !== (b.document === undefined), 'needs one of difference and document'),
+  takesDocument: true,
   response: z.object({ saveNumber: z.number().int() }),
   errors: ['scene/newer', 'scene/refused', 'scene/deleted', 'scene/mesh-missing'],
 });

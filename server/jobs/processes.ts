@@ -1,0 +1,11 @@
+// Other processes of this machine.
+
+/** Whether there is a process of this number. */
+export function isAlive(pid: number): boolean {
+  try {
+    process.kill(pid, 0);
+    return true;
+  } catch (error) {
+    return (error as NodeJS.ErrnoException).code === 'EPERM';
+  }
+}
