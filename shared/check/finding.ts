@@ -29,8 +29,8 @@ function sideOf(side: TaskSide): Side {
 }
 
 /**
- * Tells when the bounds are close enough: within the accuracy, and within a tenth of `touch` as long as a gap that decides
- * the verdict lies between them. Below `touch` it goes on to tell contact from a hair's breadth.
+ * Tells when the bounds are close enough: within the accuracy, and within a twentieth of `touch` as long as a gap that
+ * decides the verdict lies between them or hardly above. Below `touch` it goes on to tell contact from a hair's breadth.
  */
 function settledFor(accuracy: number, touch: number, deciding: readonly number[], rounding: number): Settled {
   let patience = 4000;
@@ -43,7 +43,8 @@ function settledFor(accuracy: number, touch: number, deciding: readonly number[]
       patience -= 1;
       return patience < 0;
     }
-    return width <= touch / 10 || !deciding.some((t) => lower <= t && t <= upper);
+    // half of what is allowed, so that a gap which is exactly the required one, give or take its rounding, clears
+    return width <= touch / 20 || !deciding.some((t) => lower <= t && t <= upper + touch / 10);
   };
 }
 
@@ -130,7 +131,7 @@ function verdictOf(m: Measured, margin: number, touch: number): Verdict {
 
 function jointVerdict(m: Measured, pushOut: PushOut | null, allow: number, touch: number): Verdict {
   if (pushOut !== null) return pushOut.length <= allow + 2 * touch ? 'seated' : 'hits';
-  return m.gap < LOOSE ? 'seated' : 'loose';
+  return m.gap < LOOSE - CONTACT ? 'seated' : 'loose';
 }
 
 /** Works out one finding. Depends on nothing but the task and the scene it belongs to. */
@@ -157,8 +158,13 @@ export function computeFinding(prepared: Prepared, task: Task, meter: GapMeter):
     tightSpans = verdict === 'hits' || verdict === 'tight' ? null : [];
   } else if (motions.length === 1) {
     const moving = task.a.motion !== null ? 'a' : 'b';
-    const ask = (limit: number): Span[] =>
-      spansBelow({ meter, a, b, moving, limit, slack: touch / 10, accuracy, largest: prepared.largest });
+    const ask = (limit: number): Span[] => {
+      const spans = spansBelow({ meter, a, b, moving, limit, slack: touch / 10, accuracy, largest: prepared.largest });
+      if (spans.length > 0 || m.gapAtLeast >= limit) return spans;
+      // so little below the limit that no stretch was: the place itself
+      const p = m.at.positions[moving === 'a' ? 0 : 1];
+      return [[p, p]];
+    };
     if (verdict === 'hits') hitSpans = ask(touch);
     if (verdict === 'hits' || verdict === 'tight') tightSpans = ask(decision.required + tolerances);
   }

@@ -91,13 +91,15 @@ export function spansBelow(q: SpanQuestion): Span[] {
     }
     return sum;
   };
-  const { meter, a, b, moving, limit } = q;
-  const ground: MarchGround = { meter, a, b, moving, limit, clearFrom: limit - q.slack + roundingOf(q.largest) };
+  const { meter, a, b, moving } = q;
+  // in the middle of what may go either way: parts that keep exactly the limit all along are clear of it, not here and there
+  const limit = q.limit - q.slack / 2;
+  const ground: MarchGround = { meter, a, b, moving, limit, clearFrom: q.limit - q.slack + roundingOf(q.largest) };
   const rest = { from: 0, to: 1 };
   const other = q.moving === 'a' ? q.b : q.a;
   /** Whether the gap in the middle, or the depth of an overlap there, outlasts all that moves on the way to either end. */
   const isBelowAllAlong = (middle: number, reaches: number): boolean => {
-    const spare = q.limit - reaches;
+    const spare = limit - reaches;
     if (spare > 0) {
       const here = { from: middle, to: middle };
       const near = q.meter.measure(
@@ -125,7 +127,7 @@ export function spansBelow(q: SpanQuestion): Span[] {
   const visit = (from: number, to: number): void => {
     const middle = from + (to - from) / 2;
     const near = gapOver(ground, { from, to });
-    if (near.upper >= q.limit) return;
+    if (near.upper >= limit) return;
     const travel = travelBetween(from, to);
     const position = near.positions[q.moving === 'a' ? 0 : 1];
     const reaches = Math.max(travelBetween(from, middle), travelBetween(middle, to));
