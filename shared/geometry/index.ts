@@ -1,5 +1,5 @@
 // The door of the kernel: shapes, paths and the gap between them. It knows nothing of cars.
-export { isInside, inBox, windingNumber } from './contain';
+export { isInside, inBox, piecePoints, windingNumber } from './contain';
 export { CONTACT, GapMeter, roundingOf } from './gap';
 export type { Gap } from './gap';
 export { meshExtent, meshFromSoup, meshFromStl } from './mesh';

@@ -256,6 +256,15 @@ describe('verdicts', () => {
     expect(inside(0)).toEqual(['clears', true]);
     expect(inside(80)).toEqual(['clears', false]);
   });
+
+  test('a ring around an open scan is not inside it, although the middle of its box is; a ring within is', () => {
+    const scan = boxSoup(40, 40, 40).slice(9);
+    const inside = (ring: number[]): unknown =>
+      findingOf(reportOf(sceneOf([part('a', [mesh('scan')]), part('b', [mesh('ring')])]), { scan, ring }), 'a', 'b')
+        .insideSheet ?? false;
+    expect(inside(torusSoup(60, 5, 16, 8))).toBe(false);
+    expect(inside(torusSoup(10, 3, 16, 8))).toBe(true);
+  });
 });
 
 describe('joints at rest', () => {
