@@ -32,5 +32,7 @@ export function openDatabase(url: string, connections: number, onError: (error: 
   });
   // a connection that dies while idle must not end the process
   pool.on('error', onError);
+  // nor one that dies between two queries of its holder
+  pool.on('connect', (client) => client.on('error', onError));
   return { pool, db: drizzle(pool, { schema: tables }), close: () => pool.end() };
 }

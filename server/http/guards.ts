@@ -39,6 +39,12 @@ export function numberRequests(req: Request, res: Response, next: NextFunction):
   next();
 }
 
+/** Refuses a body that is no JSON: forms and plain text can be sent by other sites' pages. A body of no bytes is none. */
+export function assertJson(req: Request): void {
+  const isEmpty = req.headers['transfer-encoding'] === undefined && Number(req.headers['content-length'] ?? 0) === 0;
+  if (!isEmpty && req.is('application/json') === false) throw new ApiError('request/not-json');
+}
+
 /** Refuses changes that another site's page sends with the person's cookie. */
 export function refuseOtherSites(config: Config): RequestHandler {
   const allowed = new Set([config.baseUrl, ...config.origins]);

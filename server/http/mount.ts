@@ -8,6 +8,7 @@ import type { Person } from '../auth/auth';
 import { ApiError } from './api-error';
 import type { LimitKind } from './limits';
 import type { Services } from './services';
+import { assertJson } from './guards';
 import { findStanding } from './standing';
 
 export interface Call<P, Q, B> {
@@ -76,7 +77,7 @@ const jsonReaders = {
 /** Reads the body only now, when the caller has the right: others cannot make the server parse megabytes. */
 async function readJson(endpoint: Endpoint, req: Request, res: Response): Promise<void> {
   if (endpoint.method === 'GET') return;
-  if (req.is('application/json') === false) throw new ApiError('request/not-json');
+  assertJson(req);
   await runBefore(endpoint.takesDocument ? jsonReaders.document : jsonReaders.other, req, res);
 }
 

@@ -2,7 +2,14 @@
 import { hostname } from 'node:os';
 import { and, eq, inArray, lt, or, sql } from 'drizzle-orm';
 import { EventEmitter } from 'node:events';
-import { makeWorkerUtils, run, type Runner, type TaskList, type WorkerEvents } from 'graphile-worker';
+import {
+  Logger as QueueLogger,
+  makeWorkerUtils,
+  run,
+  type Runner,
+  type TaskList,
+  type WorkerEvents,
+} from 'graphile-worker';
 import type { Pool } from 'pg';
 import type { Logger } from 'pino';
 import { tables, type Database, type Queryable } from '../db/client';
@@ -82,7 +89,12 @@ async function freeDeadWorkers(options: RunnerOptions, unlock: (ids: string[]) =
 /** Starts working on jobs. */
 export async function startJobs(options: RunnerOptions): Promise<JobRunner> {
   const { db, pool, handlers, log } = options;
-  const utils = await makeWorkerUtils({ pgPool: pool });
+  // its lines go where all others go; faults come with the events below
+  const logger = new QueueLogger(() => (level, message) => {
+    if (level === 'error' || level === 'warning') log.warn({ level }, message);
+    else log.debug({ level }, message);
+  });
+  const utils = await makeWorkerUtils({ pgPool: pool, logger });
   const free = async (): Promise<void> => {
     await freeDeadWorkers(options, (ids) => utils.forceUnlockWorkers(ids));
     await options.onFreed?.();
@@ -115,6 +127,7 @@ export async function startJobs(options: RunnerOptions): Promise<JobRunner> {
   events.on('job:error', ({ job, error }) => log.warn({ job: job.task_identifier, err: error }, 'a job failed'));
   const runner: Runner = await run({
     pgPool: pool,
+    logger,
     concurrency: options.concurrency,
     taskList,
     events,
