@@ -28,15 +28,15 @@ function reachThroughout(s: Stand, nx: number, ny: number, nz: number, scratch: 
   const qx = ky * nz - kz * ny;
   const qy = kz * nx - kx * nz;
   const qz = kx * ny - ky * nx;
-  const atPoint = (x: number, y: number, z: number): number => x * t.point[0] + y * t.point[1] + z * t.point[2];
-  const pivot = atPoint(nx, ny, nz);
+  const [ox, oy, oz] = t.point;
+  const pivot = nx * ox + ny * oy + nz * oz;
   let most = -Infinity;
   for (let side = -1; side <= 1; side += 2) {
     const w = side * t.sin;
     const mx = along * kx + t.cos * px + w * qx;
     const my = along * ky + t.cos * py + w * qy;
     const mz = along * kz + t.cos * pz + w * qz;
-    const r = pivot - atPoint(mx, my, mz) + reachOf(s, mx, my, mz, scratch);
+    const r = pivot - (mx * ox + my * oy + mz * oz) + reachOf(s, mx, my, mz, scratch);
     if (r > most) most = r;
   }
   if (t.bump === 0) return most;
