@@ -1,7 +1,8 @@
-// One contender in a process of its own, so that its memory is its own: `contender.ts engine|peer SCENE RUNS`. Answers with
+// One contender in a process of its own, so that its memory is its own: `contender.ts engine|contacts|distances SCENE RUNS`. Answers with
 // one line of JSON.
 import { checkScene, planCheck } from '#shared/check';
 import { readyScene } from './demo-scene';
+import { STRIDE } from './stride';
 import { SampledPeer } from './sampled-peer';
 
 export interface Times {
@@ -19,8 +20,11 @@ export interface Times {
 
 const [kind = '', file = '', runs = '5'] = process.argv.slice(2);
 const scene = readyScene(file);
-const peer = kind === 'peer' ? new SampledPeer(scene.prepared) : null;
-const work = (): unknown => (peer === null ? checkScene(scene.prepared, scene.sha256) : peer.run());
+const peer = kind === 'engine' ? null : new SampledPeer(scene.prepared);
+const work = (): unknown => {
+  if (peer === null) return checkScene(scene.prepared, scene.sha256);
+  return kind === 'contacts' ? peer.contacts() : peer.distances(STRIDE);
+};
 
 globalThis.gc?.();
 const before = process.memoryUsage().rss;

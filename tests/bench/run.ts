@@ -5,12 +5,13 @@ import { cpus } from 'node:os';
 import path from 'node:path';
 import type { Times } from './contender';
 import { demoScenes } from './demo-scene';
+import { SAMPLES } from './sampled-peer';
+import { STRIDE } from './stride';
 
 const ENGINE_RUNS = 5;
-/** The peer takes long: fewer runs, and no run to warm up. */
-const PEER_RUNS = 1;
+const CONTACT_RUNS = 3;
 
-function contend(kind: 'engine' | 'peer', file: string, runs: number): Times {
+function contend(kind: 'engine' | 'contacts' | 'distances', file: string, runs: number): Times {
   const script = path.join(import.meta.dirname, 'contender.ts');
   const args = ['--expose-gc', '--import', 'tsx', script, kind, file, String(runs)];
   const result = spawnSync(process.execPath, args, { encoding: 'utf8', maxBuffer: 1e8 });
@@ -22,52 +23,41 @@ const median = (values: readonly number[]): number => {
   const sorted = [...values].sort((a, b) => a - b);
   return ((sorted[(sorted.length - 1) >> 1] ?? NaN) + (sorted[sorted.length >> 1] ?? NaN)) / 2;
 };
-const ms = (value: number): string => `${value < 100 ? value.toFixed(1) : Math.round(value)} ms`;
-const mb = (value: number): string => `${Math.round(value)} MB`;
+const ms = (value: number): string =>
+  value < 10_000 ? `${value.toFixed(value < 100 ? 1 : 0)} ms` : `${Math.round(value / 1000)} s`;
+const memory = ({ grownBy, peak }: Times): string => `${Math.round(grownBy)} MB more, ${Math.round(peak)} MB in all`;
 
-const rows: string[][] = [
-  [
-    'scene',
-    'findings',
-    'mesh triangles',
-    'engine, proven',
-    'peer, 200 samples',
-    'ratio',
-    'engine memory',
-    'peer memory',
-  ],
-];
 let isSlower = false;
 for (const file of demoScenes()) {
   const engine = contend('engine', file, ENGINE_RUNS);
-  const peer = contend('peer', file, PEER_RUNS);
-  const ratio = median(peer.runs) / median(engine.runs);
-  if (ratio < 1) isSlower = true;
-  rows.push([
-    `${engine.scene} (${engine.parts} parts)`,
-    String(engine.findings),
-    String(engine.triangles),
-    ms(median(engine.runs)),
-    ms(median(peer.runs)),
-    `${ratio.toFixed(1)}x`,
-    `${mb(engine.grownBy)} (peak ${mb(engine.peak)})`,
-    `${mb(peer.grownBy)} (peak ${mb(peer.peak)})`,
-  ]);
-}
-
-const widths = rows[0]!.map((_, i) => Math.max(...rows.map((row) => row[i]!.length)));
-for (const row of rows)
+  const contacts = contend('contacts', file, CONTACT_RUNS);
+  const distances = contend('distances', file, 1);
+  const own = median(engine.runs);
+  const yesOrNo = median(contacts.runs);
+  const gaps = median(distances.runs) * STRIDE;
+  if (gaps < own) isSlower = true;
+  const rows = [
+    ['engine: proven gaps, spans, push-outs', ms(own), '1x', memory(engine)],
+    [
+      `three-mesh-bvh: yes or no at ${SAMPLES} samples`,
+      ms(yesOrNo),
+      `${(yesOrNo / own).toFixed(2)}x`,
+      memory(contacts),
+    ],
+    [`three-mesh-bvh: distance at ${SAMPLES} samples`, ms(gaps), `${Math.round(gaps / own)}x`, memory(distances)],
+  ];
   process.stdout.write(
-    `${row
-      .map((cell, i) => cell.padEnd(widths[i]!))
-      .join('  ')
-      .trimEnd()}\n`,
+    `${engine.scene}: ${engine.parts} parts, ${engine.findings} findings, ${engine.triangles} triangles in meshes\n`,
   );
+  for (const [what = '', time = '', ratio = '', held = ''] of rows) {
+    process.stdout.write(`  ${what.padEnd(46)} ${time.padStart(10)} ${ratio.padStart(9)}   ${held}\n`);
+  }
+}
 process.stdout.write(
-  `\nNode ${process.version}, ${cpus()[0]?.model ?? 'unknown processor'}; engine: median of ${ENGINE_RUNS} runs after one to warm up, ` +
-    `one thread; peer: ${PEER_RUNS} run. Trees are built before the clock starts.\n`,
+  `Node ${process.version}, ${cpus()[0]?.model ?? 'unknown processor'}, one thread. Engine: median of ${ENGINE_RUNS} runs after one to warm up; ` +
+    `yes or no: of ${CONTACT_RUNS}; distances: one sample in ${STRIDE} timed, the time scaled up. Trees are built before the clock starts.\n`,
 );
 if (isSlower) {
-  process.stderr.write('The engine is slower than its peer on a scene above.\n');
+  process.stderr.write('The engine is slower than the distances of its peer on a scene above.\n');
   process.exitCode = 1;
 }
