@@ -1,6 +1,6 @@
 // A mesh as the kernel knows it: welded, judged (body or sheet) and counted. File units and the file's own frame.
 import { readStl } from './stl';
-import type { TriangleSoup } from './stl';
+import type { TriangleSoup } from './triangle-soup';
 import { hashNumbers, tableSize, weld } from './weld';
 
 export interface Mesh {

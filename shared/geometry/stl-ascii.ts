@@ -1,6 +1,6 @@
 // The text form of STL: `solid`, facets of exactly three corners, `endsolid`, once or several times over, in any case and
 // indentation. Normals are not used for anything and may be wrong or missing; corners may not.
-import type { StlResult } from './stl';
+import type { StlResult } from './triangle-soup';
 
 type Word = 'solid' | 'facet' | 'normal' | 'outer' | 'loop' | 'vertex' | 'endloop' | 'endfacet' | 'endsolid';
 

@@ -3,18 +3,12 @@
 // three corners as float32, two bytes of attribute). The header says nothing: files that begin with the letters "solid"
 // are often binary, so the size decides first and the text second.
 import { readAsciiStl } from './stl-ascii';
+import type { StlResult } from './triangle-soup';
 
 /** The longest STL file that is read, in bytes. */
 export const MAX_MESH_BYTES = 256 * 1024 * 1024;
 /** The most triangles a mesh may hold. */
 export const MAX_MESH_TRIANGLES = 5_000_000;
-
-/** The corners of n triangles in file units, nine numbers a triangle, all finite, no negative zero. */
-export type TriangleSoup = Float32Array | Float64Array;
-
-export type StlResult =
-  | { readonly ok: true; readonly soup: TriangleSoup; readonly form: 'binary' | 'text' }
-  | { readonly ok: false; readonly reason: string };
 
 const refuse = (reason: string): StlResult => ({ ok: false, reason });
 

@@ -1,6 +1,6 @@
 // From loose triangles to a mesh of shared corners: corners with equal coordinates become one, triangles with fewer than
 // three different corners and exact repeats are dropped. Everything hashes exact bits; nothing is rounded together.
-import type { TriangleSoup } from './stl';
+import type { TriangleSoup } from './triangle-soup';
 
 export interface Welded {
   /** Corners, three numbers each, in file units. */

@@ -161,9 +161,9 @@ test('a binary file that was corrupted as text has corners 1e29 away: refused by
 });
 
 describe('meshes from arrays', () => {
-  const require = createRequire(import.meta.url);
+  const load = createRequire(import.meta.url);
   const soupOf = (name: string): Float64Array => {
-    const { positions, cells } = require(name) as { positions: number[][]; cells: number[][] };
+    const { positions, cells } = load(name) as { positions: number[][]; cells: number[][] };
     return Float64Array.from(
       cells.flat().flatMap((i) => positions[i]!),
       (x) => x + 0,
@@ -180,7 +180,7 @@ describe('meshes from arrays', () => {
     expect(Math.abs(measures(made.mesh).volume)).toBeCloseTo(194.288, 2);
   });
   test('an open one: 992 triangles; its arrays count 528 open edges, welding closes most of them', () => {
-    const { cells } = require('teapot') as { cells: number[][] };
+    const { cells } = load('teapot') as { cells: number[][] };
     const made = meshFromSoup(soupOf('teapot'));
     if (!made.ok) throw new Error(made.reason);
     expect(openEdges({ triangles: Uint32Array.from(cells.flat()) })).toBe(528);
