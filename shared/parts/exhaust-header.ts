@@ -53,7 +53,7 @@ export const exhaustHeader = defineRecipe({
         out(end + 120, p.reach, -p.drop),
       ),
     );
-    if (p.tail > 0) {
+    if (p.tail >= 1) {
       solids.push(
         rod(
           'tail',

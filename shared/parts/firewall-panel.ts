@@ -38,10 +38,10 @@ export const firewallPanel = defineRecipe({
     const faults = [];
     const inside = (y: number, z: number, wide: number, high: number): boolean =>
       Math.abs(y) + wide / 2 < p.width / 2 && z - high / 2 > 0 && z + high / 2 < p.height;
-    if (p.columnOpening > 0 && !inside(p.columnAcross, p.columnUp, p.columnOpening, p.columnOpening)) {
+    if (p.columnOpening >= 1 && !inside(p.columnAcross, p.columnUp, p.columnOpening, p.columnOpening)) {
       faults.push({ key: 'columnAcross', message: 'Column opening must lie within the sheet.' });
     }
-    if (p.boxWidth > 0 && !inside(p.boxAcross, p.boxUp, p.boxWidth, p.boxHeight)) {
+    if (p.boxWidth >= 1 && !inside(p.boxAcross, p.boxUp, p.boxWidth, p.boxHeight)) {
       faults.push({ key: 'boxAcross', message: 'Pedal-box opening must lie within the sheet.' });
     }
     return faults;
@@ -52,8 +52,8 @@ export const firewallPanel = defineRecipe({
       z: [z - high / 2, z + high / 2],
     });
     const openings: Patch[] = [
-      ...(p.columnOpening > 0 ? [patch(p.columnAcross, p.columnUp, p.columnOpening, p.columnOpening)] : []),
-      ...(p.boxWidth > 0 ? [patch(p.boxAcross, p.boxUp, p.boxWidth, p.boxHeight)] : []),
+      ...(p.columnOpening >= 1 ? [patch(p.columnAcross, p.columnUp, p.columnOpening, p.columnOpening)] : []),
+      ...(p.boxWidth >= 1 ? [patch(p.boxAcross, p.boxUp, p.boxWidth, p.boxHeight)] : []),
     ];
     const whole: Patch = { y: [-p.width / 2, p.width / 2], z: [0, p.height] };
     const solids: Solid[] = [
@@ -73,7 +73,7 @@ export const firewallPanel = defineRecipe({
       }
     }
     const holes: Hole[] =
-      p.columnOpening > 0
+      p.columnOpening >= 1
         ? [{ id: 'column', at: [0, p.columnAcross, p.columnUp], axis: [1, 0, 0], diameter: p.columnOpening }]
         : [];
     const turned = placed(solids, { turn: [0, p.rake, 0] });

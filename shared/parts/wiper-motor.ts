@@ -48,7 +48,7 @@ export const wiperMotor = defineRecipe({
       cylinder('crank-nut', 'Crank nut', 18, 10, [p.crankBehind + 7, 0, 0], 'x'),
       cylinder('pin', 'Crank pin', 10, 22, [pin[0] + 9, pin[1], pin[2]], 'x'),
       cylinder('ball', 'Link ball', 24, 14, [pin[0] + 17, pin[1], pin[2]], 'x'),
-      ...(p.linkStub > 0
+      ...(p.linkStub >= 1
         ? [
             bar(
               'link-end',
