@@ -132,9 +132,7 @@ export function readSource(file: string, text: string): SourceFile {
     for (const member of mathMember(node)?.split(',') ?? []) mathUses.push({ name: member, line: lineOf(node) });
     if (
       ts.isBinaryExpression(node) &&
-      [ts.SyntaxKind.AsteriskAsteriskToken, ts.SyntaxKind.AsteriskAsteriskEqualsToken].includes(
-        node.operatorToken.kind,
-      )
+      [ts.SyntaxKind.AsteriskAsteriskToken, ts.SyntaxKind.AsteriskAsteriskEqualsToken].includes(node.operatorToken.kind)
     ) {
       powers.push(lineOf(node));
     }
