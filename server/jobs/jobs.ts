@@ -79,8 +79,13 @@ async function freeDeadWorkers(options: RunnerOptions, unlock: (ids: string[]) =
         gone.length > 0 ? inArray(workerSeen.workerId, gone) : undefined,
       ),
     );
-  if (dead.length === 0) return;
-  const ids = dead.map((w) => w.id);
+  // one that was killed before its first sign of life
+  const unknown = await db.execute<{ id: string }>(sql`
+    select distinct locked_by as id from graphile_worker.jobs j
+    where locked_at < now() - make_interval(secs => ${DEAD_AFTER_MS / 1000})
+      and not exists (select from worker_seen w where w.worker_id = j.locked_by)`);
+  const ids = [...dead, ...unknown.rows].map((w) => w.id);
+  if (ids.length === 0) return;
   await unlock(ids);
   await db.delete(workerSeen).where(inArray(workerSeen.workerId, ids));
   options.log.warn({ workers: ids.length }, 'jobs of dead workers were given back');
@@ -120,8 +125,9 @@ export async function startJobs(options: RunnerOptions): Promise<JobRunner> {
   const quietly = (work: Promise<void>): void => {
     work.catch((error: unknown) => log.error({ err: error }, 'worker housekeeping failed'));
   };
-  events.on('worker:create', ({ worker }) => {
-    workers.add(worker.workerId);
+  // jobs are locked under the pool's name, not under those of its workers
+  events.on('pool:create', ({ workerPool }) => {
+    workers.add(workerPool.id);
     quietly(beat());
   });
   events.on('job:error', ({ job, error }) => log.warn({ job: job.task_identifier, err: error }, 'a job failed'));
