@@ -67,6 +67,19 @@ export const drum = (id: string, name: string, diameter: number, length: number,
 export const scanned = (id: string, name: string, mesh: string, scale = 1, at: Vec3 = [0, 0, 0], turn?: Vec3): Solid =>
   solid(id, name, { kind: 'mesh', mesh, scale }, at, turn);
 
+/** The part with its zero point at a place of the car; its solids, written in the car, stay where they are. */
+export function zeroedAt(part: Component, zero: Vec3): Component {
+  const tidy = (x: number): number => Math.round(x * 1000) / 1000;
+  return {
+    ...part,
+    pose: { at: zero },
+    solids: part.solids.map((s) => {
+      const at = s.pose.at ?? [0, 0, 0];
+      return { ...s, pose: { ...s.pose, at: [tidy(at[0] - zero[0]), tidy(at[1] - zero[1]), tidy(at[2] - zero[2])] } };
+    }),
+  };
+}
+
 /** Parts that are bolted, welded or hinged together. */
 export const joint = (a: string, b: string, allow = 1): PairRule => ({
   between: [{ component: a }, { component: b }],

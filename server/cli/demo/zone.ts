@@ -3,7 +3,7 @@
 import { FORK_LENGTH, pedalTravel, type Params } from '#shared/parts';
 import type { Component, PairRule, Scene, Vec3 } from '#shared/scene';
 import { sinCosDegrees } from '#shared/units';
-import { block, drum, joint, plainPart, readyMade, scanned } from './draw';
+import { block, drum, joint, plainPart, readyMade, scanned, zeroedAt } from './draw';
 
 const RAKE = 9;
 /** The column's line, and the middle of the pedal box on it. */
@@ -166,10 +166,13 @@ function cabin(c: ZoneChoices): Component[] {
       },
     ),
     wiper(),
-    plainPart('cowl-brace', 'Cowl brace', 'bracket', [
-      block('strut', 'Strut', [20, 20, 200], [brace[0], brace[1], COWL_UNDER - 0.1 - 100]),
-      block('foot', 'Foot', [40, 60, 4], [brace[0], brace[1], COWL_UNDER - 0.1 - 2]),
-    ]),
+    zeroedAt(
+      plainPart('cowl-brace', 'Cowl brace', 'bracket', [
+        block('strut', 'Strut', [20, 20, 200], [brace[0], brace[1], COWL_UNDER - 0.1 - 100]),
+        block('foot', 'Foot', [40, 60, 4], [brace[0], brace[1], COWL_UNDER - 0.1 - 2]),
+      ]),
+      [brace[0], brace[1], COWL_UNDER - 0.1],
+    ),
     readyMade(
       'heater-box',
       'heater',
@@ -180,15 +183,18 @@ function cabin(c: ZoneChoices): Component[] {
         turn: [0, RAKE, 0],
       },
     ),
-    plainPart(
-      'harness-clip',
-      'Harness clip',
-      'bracket',
-      [
-        block('stay', 'Stay', [12, 12, 350], [pegPlace()[0], 240, COWL_UNDER - 0.1 - 175]),
-        block('blade', 'Blade', [1, c.clipReach - 240, 16], [pegPlace()[0], (240 + c.clipReach) / 2, pegPlace()[2]]),
-      ],
-      { note: 'Thin sheet: only a swept check sees what passes it.' },
+    zeroedAt(
+      plainPart(
+        'harness-clip',
+        'Harness clip',
+        'bracket',
+        [
+          block('stay', 'Stay', [12, 12, 350], [pegPlace()[0], 240, COWL_UNDER - 0.1 - 175]),
+          block('blade', 'Blade', [1, c.clipReach - 240, 16], [pegPlace()[0], (240 + c.clipReach) / 2, pegPlace()[2]]),
+        ],
+        { note: 'Thin sheet: only a swept check sees what passes it.' },
+      ),
+      [pegPlace()[0], 240, COWL_UNDER - 0.1],
     ),
     readyMade('seat', 'seat', 'Driver’s seat', { width: 440 }, { at: [730, COLUMN_ACROSS, 0] }),
   ];
@@ -266,20 +272,23 @@ function engineBay(c: ZoneChoices): Component[] {
   const crank = 270;
   const cover: Vec3 = [-150, 318, 464];
   return [
-    plainPart('engine', 'Engine with accessories', 'engine', [
-      scanned('corner', 'Right head and valve cover', 'engine-corner.stl', 1, cover, [-45, 0, 0]),
-      block('port-face', 'Exhaust port face', [330, 30, 60], [-375, 365, 350]),
-      block('block', 'Block', [470, 400, 210], [-345, 0, crank + 35]),
-      block('left-head', 'Left head', [400, 150, 90], [-350, -225, 400], [45, 0, 0]),
-      block('left-port-face', 'Exhaust port face', [330, 95, 60], [-360, -332.5, 385]),
-      block('left-cover', 'Left valve cover', [390, 110, 76], [-350, -286, 455], [45, 0, 0]),
-      block('intake', 'Intake', [330, 260, 90], [-350, 0, 470]),
-      drum('air-cleaner', 'Air cleaner', 320, 60, [-350, 0, 660]),
-      drum('throttle-body', 'Throttle body', 90, 120, [-350, 0, 572]),
-      drum('distributor', 'Distributor', 90, 190, [-150, 0, 500]),
-      drum('alternator', 'Alternator', 140, 150, [-560, 230, 500], [0, 90, 0]),
-      drum('pulley', 'Crank pulley', 170, 50, [-606, 0, crank], [0, 90, 0]),
-    ]),
+    zeroedAt(
+      plainPart('engine', 'Engine with accessories', 'engine', [
+        scanned('corner', 'Right head and valve cover', 'engine-corner.stl', 1, cover, [-45, 0, 0]),
+        block('port-face', 'Exhaust port face', [330, 30, 60], [-375, 365, 350]),
+        block('block', 'Block', [470, 400, 210], [-345, 0, crank + 35]),
+        block('left-head', 'Left head', [400, 150, 90], [-350, -225, 400], [45, 0, 0]),
+        block('left-port-face', 'Exhaust port face', [330, 95, 60], [-360, -332.5, 385]),
+        block('left-cover', 'Left valve cover', [390, 110, 76], [-350, -286, 455], [45, 0, 0]),
+        block('intake', 'Intake', [330, 260, 90], [-350, 0, 470]),
+        drum('air-cleaner', 'Air cleaner', 320, 60, [-350, 0, 660]),
+        drum('throttle-body', 'Throttle body', 90, 120, [-350, 0, 572]),
+        drum('distributor', 'Distributor', 90, 190, [-150, 0, 500]),
+        drum('alternator', 'Alternator', 140, 150, [-560, 230, 500], [0, 90, 0]),
+        drum('pulley', 'Crank pulley', 170, 50, [-606, 0, crank], [0, 90, 0]),
+      ]),
+      [-150, 0, crank],
+    ),
     readyMade(
       'exhaust-header',
       'header-right',
