@@ -74,7 +74,7 @@ export function zeroedAt(part: Component, zero: Vec3): Component {
     ...part,
     pose: { at: zero },
     solids: part.solids.map((s) => {
-      const at = s.pose.at ?? [0, 0, 0];
+      const at = s.pose?.at ?? [0, 0, 0];
       return { ...s, pose: { ...s.pose, at: [tidy(at[0] - zero[0]), tidy(at[1] - zero[1]), tidy(at[2] - zero[2])] } };
     }),
   };

@@ -108,7 +108,7 @@ test('a hood opens upwards about its rear edge', () => {
 test('a steering joint in the cabin stands behind the firewall, one in the bay ahead of it', () => {
   const jointX = (jointAhead: number): number => {
     const solid = built('steering-column', { jointAhead, rake: 5 }).solids.find((s) => s.id === 'joint-cross-1')!;
-    return solid.pose.at?.[0] ?? 0;
+    return solid.pose?.at?.[0] ?? 0;
   };
   expect(jointX(200)).toBeLessThan(-190);
   expect(jointX(-200)).toBeGreaterThan(190);
