@@ -11,7 +11,7 @@ import {
   S3Client,
 } from '@aws-sdk/client-s3';
 import type { Config } from '../config';
-import { assertKey, collect, type FileStore } from './file-store';
+import { assertKey, collect, type FileStore } from './stored';
 
 type S3Settings = Extract<Config['storage'], { kind: 's3' }>;
 

@@ -15,8 +15,8 @@ export const RESOURCES = [
 ];
 /** What any part of the server may use. */
 const SERVICES = ['http', 'auth', 'mail', 'storage', 'jobs', 'db'];
-/** The places where the parts meet. */
-const MEETING_PLACES = new Set(['server/main.ts', 'server/app.ts', 'server/db/seed.ts']);
+/** The places where the parts meet; the nightly sweep clears up behind all of them. */
+const MEETING_PLACES = new Set(['server/main.ts', 'server/app.ts', 'server/db/seed.ts', 'server/jobs/sweep.ts']);
 
 export const serverFolders: Rule = (files) =>
   eachImport(
