@@ -101,7 +101,7 @@ test('A guest reads the projects he was added to, and no others', async ({ enter
   await page.goto(`/projects/${shown!.id}`);
   await expect(page.getByRole('heading', { name: 'Shown pickup' })).toBeVisible();
   await page.goto(`/projects/${hidden!.id}`);
-  await expect(page.getByText('Your role in this team does not allow that.')).toBeVisible();
+  await expect(page.getByText('There is nothing here, or it is not yours to see.')).toBeVisible();
 
   await owner.page.goto(`/projects/${hidden!.id}`);
   await owner.page.getByLabel('Gus Tamblyn').check();
