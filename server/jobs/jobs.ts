@@ -96,7 +96,7 @@ export async function startJobs(options: RunnerOptions): Promise<JobRunner> {
   const { db, pool, handlers, log } = options;
   // its lines go where all others go; faults come with the events below
   const logger = new QueueLogger(() => (level, message) => {
-    if (level === 'error' || level === 'warning') log.warn({ level }, message);
+    if (['error', 'warning'].includes(level)) log.warn({ level }, message);
     else log.debug({ level }, message);
   });
   const utils = await makeWorkerUtils({ pgPool: pool, logger });

@@ -86,7 +86,7 @@ test('pressed twice, at once or one after the other, it runs once', async () => 
   const answers = await Promise.all([ask(sceneId), ask(sceneId), ask(sceneId)]);
   expect(answers.map((a) => a.status)).toEqual([202, 202, 202]);
   expect(new Set(answers.map((a) => a.body.id)).size).toBe(1);
-  expect(answers[0]!.body).toMatchObject({
+  expect(answers[0].body).toMatchObject({
     state: 'queued',
     done: 0,
     total: 0,
