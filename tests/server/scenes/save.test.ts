@@ -9,6 +9,7 @@ import { binaryStl } from '../../fixtures/stl';
 import { call, must, problemOf } from '../support/call';
 import { makeTeam, type TestTeam } from '../support/people';
 import { startTestServer, type TestServer } from '../support/server';
+import { whileLocked } from '../support/while-locked';
 import { loaded, makeProject, makeScene, save, twoBlocks, upload } from '../support/things';
 
 let server: TestServer;
@@ -68,8 +69,9 @@ describe('somebody else was faster', () => {
   });
 
   test('of ten saves at the same moment exactly one is carried out', async () => {
-    const tries = Array.from({ length: 10 }, (_, i) => put({ base: 1, document: twoBlocks(`Try ${i}`) }));
-    const answers = await Promise.all(tries);
+    const answers = await whileLocked(server, `select from scene where id = '${sceneId}' for update`, 5, () =>
+      Array.from({ length: 10 }, (_, i) => put({ base: 1, document: twoBlocks(`Try ${i}`) })),
+    );
     expect(answers.filter((a) => a.status === 200)).toHaveLength(1);
     expect(answers.filter((a) => a.code === 'scene/newer')).toHaveLength(9);
     const winner = answers.findIndex((a) => a.status === 200);
@@ -80,7 +82,8 @@ describe('somebody else was faster', () => {
 test('the same save sent twice, because its answer was lost, is carried out once', async () => {
   const saveId = randomUUID();
   const body = { base: 1, saveId, document: twoBlocks('Once') };
-  const answers = await Promise.all([put(body), put(body), put(body)]);
+  const lock = `select from scene where id = '${sceneId}' for update`;
+  const answers = await whileLocked(server, lock, 3, () => [put(body), put(body), put(body)]);
   expect(answers.map((a) => a.body)).toEqual([{ saveNumber: 2 }, { saveNumber: 2 }, { saveNumber: 2 }]);
   await save(server, team.owner, sceneId, 2, twoBlocks('Later'));
   expect((await put(body)).body).toEqual({ saveNumber: 2 });

@@ -19,6 +19,7 @@ import { binaryStl } from '../../fixtures/stl';
 import { call, must } from '../support/call';
 import { makeTeam, signInAs, type TestTeam } from '../support/people';
 import { startTestServer, type TestServer } from '../support/server';
+import { whileLocked } from '../support/while-locked';
 import { dryFit, makeProject, makeScene, takePicture, upload } from '../support/things';
 
 let server: TestServer;
@@ -95,7 +96,8 @@ describe('the last owner', () => {
 
   test('of two owners who leave at the same moment one stays', async () => {
     await roleOf(team.designer.id, 'owner');
-    const answers = await Promise.all(
+    // both are out of the team already, and neither has looked yet whether an owner is left
+    const answers = await whileLocked(server, 'lock table project_guest in exclusive mode', 2, () =>
       [team.owner, team.designer].map((p) => call(server, p, leaveTeam, { params: params() })),
     );
     expect(answers.map((a) => a.status).sort()).toEqual([200, 409]);
