@@ -61,10 +61,18 @@ function note(folder, key, create) {
  * @param {string} folder
  */
 export function makeFolder(folder) {
-  const first = fs.mkdirSync(folder, { recursive: true });
-  // whatever the umask says; folders that were there stay as they are
-  for (let made = folder; first !== undefined && made.startsWith(first); made = path.dirname(made)) {
-    fs.chmodSync(made, isRoot ? 0o711 : 0o700);
+  const missing = [];
+  for (let at = folder; !fs.existsSync(at); at = path.dirname(at)) missing.unshift(at);
+  // one by one: made all at once, a folder in a place that takes none is tried for ever
+  for (const at of missing) {
+    try {
+      fs.mkdirSync(at);
+    } catch (error) {
+      // another process was faster
+      if (/** @type {NodeJS.ErrnoException} */ (error).code !== 'EEXIST') throw error;
+    }
+    // whatever the umask says; folders that were there stay as they are
+    fs.chmodSync(at, isRoot ? 0o711 : 0o700);
   }
 }
 

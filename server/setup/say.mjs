@@ -53,6 +53,7 @@ export function sentenceOf(error, what) {
   if (code === 'EACCES' || code === 'EPERM') {
     return `A right is missing while ${what}: ${path ?? text}. Give this user the right, or set GAPWRIGHT_DATA to a folder it owns.`;
   }
+  if (code === 'ENOENT' && path !== undefined) return `It failed while ${what}: ${path} cannot be made or found.`;
   if (code === 'EROFS') return `The file system is read-only while ${what}: ${path ?? text}.`;
   return `It failed while ${what}: ${text.replace(/\s+/g, ' ').slice(0, 400)}`;
 }
